@@ -5,7 +5,15 @@ export default [
   ...nextVitals,
   ...nextTypescript,
   {
-    ignores: ['.next/**', '.data/**', 'node_modules/**', 'public/**', 'coverage/**', 'next-env.d.ts', 'test-results/**'],
+    ignores: [
+      '.next/**',
+      '.data/**',
+      'node_modules/**',
+      'public/**',
+      'coverage/**',
+      'next-env.d.ts',
+      'test-results/**',
+    ],
   },
   {
     rules: {
