@@ -28,10 +28,11 @@ export interface Standing {
   position: number | null;
 }
 
-export type StandingEntry = LogEntry & Standing & {
-  /** Account that made it. */
-  accountId: string;
-};
+export type StandingEntry = LogEntry &
+  Standing & {
+    /** Account that made it. */
+    accountId: string;
+  };
 
 /** Order of entries: stamp, then position (held entries last), then id. */
 export function compareStanding(a: Standing & { id: string }, b: Standing & { id: string }): number {

@@ -101,7 +101,11 @@ export const entryKinds = {
   'note-written': {
     v: 1,
     target: z.strictObject({ noteId: uuid }),
-    value: z.strictObject({ text: note, stepId: planId.nullable(), about: z.enum(['note', 'near-miss', 'went-wrong']).default('note') }),
+    value: z.strictObject({
+      text: note,
+      stepId: planId.nullable(),
+      about: z.enum(['note', 'near-miss', 'went-wrong']).default('note'),
+    }),
   },
   'note-revised': {
     v: 1,

@@ -43,7 +43,13 @@ export function readEntry(raw: unknown, migrations: EntryMigrations = entryMigra
     return refuse('newer-version', `The entry was made by a newer version of Holdfast. Update to read it.`);
   }
   const kind = frame.data.kind as EntryKind;
-  const parts = migrateParts(kind, { target: frame.data.target, value: frame.data.value }, frame.data.v, known, migrations);
+  const parts = migrateParts(
+    kind,
+    { target: frame.data.target, value: frame.data.value },
+    frame.data.v,
+    known,
+    migrations,
+  );
   const target = entryKinds[kind].target.safeParse(parts.target);
   if (!target.success) return refuse('malformed', `${kind}: ${firstProblem(target.error)}.`);
   const value = entryKinds[kind].value.safeParse(parts.value);

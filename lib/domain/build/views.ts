@@ -57,7 +57,11 @@ export function measuredKeySizes(state: BuildState): Record<string, number> {
 }
 
 /** Result in force of a check, or undefined when it was not taken or was cleared. */
-export function checkOf(state: BuildState, stepId: string, checkId: string): Claim<EntryValue<'check-recorded'>> | undefined {
+export function checkOf(
+  state: BuildState,
+  stepId: string,
+  checkId: string,
+): Claim<EntryValue<'check-recorded'>> | undefined {
   const claim = inForce(state, at(state.checks, `${stepId}/${checkId}`));
   return claim?.value.verdict === 'cleared' ? undefined : claim;
 }

@@ -1,5 +1,15 @@
 import { z } from 'zod';
-import { adhesiveSchema, attachmentSchema, faceSchema, hardwareSchema, keySizeSchema, partSchema, placementSchema, stockSchema, supplySchema } from './parts';
+import {
+  adhesiveSchema,
+  attachmentSchema,
+  faceSchema,
+  hardwareSchema,
+  keySizeSchema,
+  partSchema,
+  placementSchema,
+  stockSchema,
+  supplySchema,
+} from './parts';
 import { markdown, minutesRange, planId, sizeSchema, text } from './primitives';
 import { stageSchema, stepSchema } from './steps';
 
@@ -25,7 +35,12 @@ export const planDocumentSchema = z.strictObject({
   language: z.string().regex(/^[a-z]{2}(-[A-Z]{2})?$/, 'a language tag such as en or en-GB'),
   /** System the author wrote it in; a builder's own choice comes first on screen. */
   units: z.enum(['imperial', 'metric']),
-  finished: z.strictObject({ length: sizeSchema, width: sizeSchema, height: sizeSchema, massG: z.number().positive().max(1_000_000).optional() }),
+  finished: z.strictObject({
+    length: sizeSchema,
+    width: sizeSchema,
+    height: sizeSchema,
+    massG: z.number().positive().max(1_000_000).optional(),
+  }),
   hours: minutesRange.meta({ description: 'Hands-on minutes in all, from the quickest to the slowest builder.' }),
   people: z.int().min(1).max(8),
   toolsNeeded: z.array(text(80)).max(60),

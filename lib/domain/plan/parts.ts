@@ -65,7 +65,11 @@ export const partSchema = z.strictObject({
   thickness: sizeSchema,
   /** Left on when first cut, taken off later. */
   rough: z
-    .strictObject({ length: lengthSchema.optional(), width: lengthSchema.optional(), thickness: lengthSchema.optional() })
+    .strictObject({
+      length: lengthSchema.optional(),
+      width: lengthSchema.optional(),
+      thickness: lengthSchema.optional(),
+    })
     .optional(),
   grain: z.enum(['along', 'across', 'any']).default('along'),
   showFace: z.enum(['face', 'back', 'both', 'none']).default('none'),
@@ -86,7 +90,10 @@ const supplyFields = {
   quantity: z.number().positive().max(100_000),
   unit: text(30),
   /** What else serves, and what changes if it is used. */
-  alternatives: z.array(z.strictObject({ item: text(160), changes: text(400) })).max(8).default([]),
+  alternatives: z
+    .array(z.strictObject({ item: text(160), changes: text(400) }))
+    .max(8)
+    .default([]),
   note: text(400).optional(),
 };
 
@@ -156,7 +163,11 @@ export const faceSchema = z.strictObject({
 });
 
 function offsetSchemaFor(what: string) {
-  return z.int('a whole number of 1/640 mm').min(-64_000_000).max(64_000_000).meta({ description: `1/640 mm, ${what}` });
+  return z
+    .int('a whole number of 1/640 mm')
+    .min(-64_000_000)
+    .max(64_000_000)
+    .meta({ description: `1/640 mm, ${what}` });
 }
 
 /** Axis-aligned box of a part in the finished piece: x to the right, y up, z towards the front. */

@@ -3,9 +3,33 @@ import { lengthSchema, markdown, minutesRange, planId, sizeSchema, text } from '
 
 /** What an operation can do to a person decides its cautions; ids match the safety table in lib/domain/handling. */
 export const operationSchema = z.enum([
-  'select', 'layout', 'rip', 'crosscut', 'sheet-cut', 'dado', 'rabbet', 'half-lap', 'rout', 'drill', 'bore', 'plane',
-  'joint-edge', 'sand', 'shape', 'mortise', 'dry-fit', 'glue-up', 'fasten', 'fit-hardware', 'turn-over', 'lift',
-  'inspect', 'finish', 'assemble', 'tie', 'clean-up',
+  'select',
+  'layout',
+  'rip',
+  'crosscut',
+  'sheet-cut',
+  'dado',
+  'rabbet',
+  'half-lap',
+  'rout',
+  'drill',
+  'bore',
+  'plane',
+  'joint-edge',
+  'sand',
+  'shape',
+  'mortise',
+  'dry-fit',
+  'glue-up',
+  'fasten',
+  'fit-hardware',
+  'turn-over',
+  'lift',
+  'inspect',
+  'finish',
+  'assemble',
+  'tie',
+  'clean-up',
 ]);
 
 export const cautionSchema = z.strictObject({
@@ -81,13 +105,20 @@ export const stepSchema = z.strictObject({
     .array(
       z.union([
         planId,
-        z.strictObject({ step: planId, glue: z.enum(['clamps-off', 'cured']).optional(), reason: text(200).optional() }),
+        z.strictObject({
+          step: planId,
+          glue: z.enum(['clamps-off', 'cured']).optional(),
+          reason: text(200).optional(),
+        }),
       ]),
     )
     .max(40)
     .default([]),
   operation: operationSchema,
-  uses: z.array(z.strictObject({ part: planId, pieces: z.int().min(1).max(200).optional(), note: text(200).optional() })).max(60).default([]),
+  uses: z
+    .array(z.strictObject({ part: planId, pieces: z.int().min(1).max(200).optional(), note: text(200).optional() }))
+    .max(60)
+    .default([]),
   makes: z.array(planId).max(40).default([]),
   tools: z.array(text(80)).max(20).default([]),
   methods: z.array(methodSchema).max(6).default([]),
@@ -99,9 +130,15 @@ export const stepSchema = z.strictObject({
   glueUp: glueUpSchema.optional(),
   finish: coatSchema.optional(),
   checks: z.array(checkSchema).max(12).default([]),
-  photosWanted: z.array(z.strictObject({ id: planId, of: text(200), before: text(120).optional() })).max(8).default([]),
+  photosWanted: z
+    .array(z.strictObject({ id: planId, of: text(200), before: text(120).optional() }))
+    .max(8)
+    .default([]),
   /** Hardware and supplies this step takes. */
-  takes: z.array(z.strictObject({ item: planId, quantity: z.number().positive().max(100_000) })).max(30).default([]),
+  takes: z
+    .array(z.strictObject({ item: planId, quantity: z.number().positive().max(100_000) }))
+    .max(30)
+    .default([]),
   cautions: z.array(cautionSchema).max(10).default([]),
   /** Tool for which a clearance is needed in a shared shop. */
   clearance: text(60).optional(),
