@@ -1,0 +1,58 @@
+/**
+ * Passwords of ten characters or more that everyone tries first, in lower case. Shorter ones are refused by their length.
+ * From memory of lists published after break-ins, without a count; runs along the keyboard and the alphabet, repeats and
+ * words with years are judged by rule in password.ts instead.
+ */
+const list = `
+passwordpassword password123 password1234 password12345 password123456 passw0rd123 p@ssw0rd123 p@ssword123 p@$$w0rd123
+mypassword mypassword1 newpassword newpassword1 thepassword yourpassword yourpasswordhere changeme123 changemenow
+changepassword resetpassword temppassword temporary1 defaultpassword secretpassword topsecret1 letmein123 letmein1234
+letmeinnow letmeinplease pleaseletmein openthedoor opensesame opensesame1 welcome123 welcome1234 welcome12345
+welcomehome welcomeback administrator administrator1 admin12345 admin123456 adminadmin adminadmin1 adminpassword
+administration superadmin superuser1 rootpassword rootroot12 testtest12 testtest123 test123456 test12345678
+testpassword testing123 testing1234 guestguest useruser12 userpassword user123456 qwerty1234 qwerty12345 qwerty123456
+qwertyqwerty qwertyuiop1 qwertyuiop12 qwertyuiop123 qwerty123qwerty q1w2e3r4t5 q1w2e3r4t5y6 1q2w3e4r5t 1q2w3e4r5t6y
+1qaz2wsx3edc 1qaz2wsx3edc4rfv zaq12wsxcde3 qazwsxedcrfv qazwsxedc123 qweasdzxc1 qweasdzxc123 asdfghjkl1 asdfghjkl123
+asdf123456 asdfasdfasdf asdf1234asdf zxcvbnm123 zxcvbnm1234 zxcvbnm12345 abc1234567 abc123456789 abcd123456
+abcd12345678 abcabcabc1 abc123abc123 a123456789 a1234567890 a1b2c3d4e5 a1b2c3d4e5f6 aa123456789 aaaaaaaaa1 123456789a
+1234567890a 123456789abc 1234567890q 123456789q 12345qwert 123456qwerty 1234qwerasdf 123qweasdzxc 123qwe123qwe
+123abc123abc 123123123123 1231231231 1122334455 112233445566 1212121212 1213141516 1020304050 1029384756 0192837465
+9876543210a 147258369a 1472583690 7894561230 789456123a 741852963a 159753456a 3141592653 3141592654 2718281828
+iloveyou12 iloveyou123 iloveyou1234 iloveyou12345 iloveyouso iloveyousomuch iloveyoumore iloveyoubaby iloveyouforever
+iloveyou4ever ilovemyself ilovemyfamily ilovemymom ilovemydad ilovemykids ilovemydog ilovemycat ilovemywife ilovejesus
+ilovejesus1 iloveme123 loveyou123 lovelove12 lovelovelove loveforever foreverlove sweetheart sweetheart1 sweetiepie
+princess12 princess123 princess1234 babygirl12 babygirl123 babygirl1234 beautiful1 beautiful12 beautiful123
+beautifulgirl butterfly1 butterfly12 butterfly123 sunshine12 sunshine123 sunshine1234 strawberry strawberry1
+blueberry1 chocolate1 chocolate12 chocolate123 cheesecake basketball basketball1 basketball12 basketball123 baseball12
+baseball123 football12 football123 football1234 footballer volleyball volleyball1 skateboard skateboard1 snowboard1
+motorcycle racecar123 dragon1234 dragon12345 dragonfly1 monkey1234 monkey12345 monkeyman1 tiger12345 charlie123
+charlie1234 michael123 michelle123 jennifer123 jessica123 jessica1234 jordan1234 anthony123 andrew1234 daniel1234
+joshua1234 matthew123 ashley1234 nicole1234 thomas1234 robert1234 william123 alexander1 alexander123 christopher
+christopher1 christian1 christian123 elizabeth1 elizabeth12 elizabeth123 samantha12 samantha123 stephanie1 stephanie12
+stephanie123 katherine1 catherine1 gabriella1 isabella12 isabella123 alexandra1 alexandria victoria12 victoria123
+benjamin12 benjamin123 jonathan12 jonathan123 nathaniel1 sebastian1 computer12 computer123 computer1234 internet12
+internet123 internet1234 technology whatever12 whatever123 whatever1234 trustno1trustno1 trustnoone trustnoone1
+nopassword nopassword1 dontforget idontknow1 idontknow123 ihateyou12 ihateyou123 godisgood1 godisgreat godblessme
+godblessyou jesuschrist jesuschrist1 jesuslovesme jesusisgod hallelujah blessed123 blessed1234 heaven1234 angel12345
+angels1234 freedom123 freedom1234 liberty123 america123 america1234 australia1 australia123 california california1
+california123 manchester manchester1 manchester123 liverpool1 liverpool12 liverpool123 birmingham washington1
+london1234 newyork123 newyorkcity summertime summer1234 winter1234 spring1234 autumn1234 monday1234 friday1234
+september1 september12 november12 november123 december12 december123 january123 february12 february123 october123
+october1234 birthday12 birthday123 happybirthday happyhappy happiness1 happiness123 happyday123 goodmorning goodnight1
+helloworld helloworld1 helloworld123 hellohello hellohello1 hello12345 hello123456 goodluck123 everything everything1
+nothing123 something1 something123 anything12 anything123 jellybean1 jellybeans marshmallow butterscotch peanutbutter
+gingerbread cinnamon12 cinnamon123 buttercup1 buttercup123 pineapple1 pineapple123 watermelon watermelon1 grandmother
+grandfather motherlove mylovelove mylove1234 lovelygirl prettygirl1 pumpkin123 rainbow123 rainbow1234 unicorn123
+unicorn1234 midnight12 midnight123 moonlight1 moonlight123 starlight1 sunflower1 sunflower12 sunflower123 thunder123
+lightning1 lightning123 dolphin123 elephant12 elephant123 scooter123 buddy12345 bailey1234 maggie1234 shadow1234
+shadow12345 master1234 master12345 mastermaster killer1234 killer12345 hunter1234 hunter12345 hunter2hunter2
+soccer1234 hockey1234 ginger1234 pepper1234 cookie1234 banana1234 orange1234 purple1234 yellow1234 silver1234
+golden1234 diamond123 diamond1234 jasmine123 jasmine1234 phoenix123 phoenix1234 gameover12 gameover123 woodworker
+woodworker1 woodworking woodworking1 woodworking123 woodshop12 woodshop123 workbench1 workbench12 workbench123
+carpenter1 carpenter12 carpenter123 carpentry1 furniture1 furniture12 furniture123 hammer1234 sawdust123 sawdust1234
+holdfast12 holdfast123 holdfast1234 holdfast12345 holdfastholdfast correcthorsebatterystaple correcthorse barcelona1
+keyboard12 keyboard123 television television1 telephone1 telephone123 university university1 friendship friendship1
+friends123 familyfirst family1234 mother1234 father1234 brother123 sister1234 children123
+`;
+
+export const commonPasswords: ReadonlySet<string> = new Set(list.split(/\s+/).filter(Boolean));
