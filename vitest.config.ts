@@ -39,6 +39,7 @@ export default defineConfig({
           include: ['tests/{server,migrations,simulation,scripts}/**/*.test.ts'],
           environment: 'node',
           globalSetup: ['tests/support/postgres-global.ts'],
+          setupFiles: ['tests/support/environment.ts'],
           hookTimeout: 60_000,
         },
       },
