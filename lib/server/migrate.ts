@@ -27,10 +27,10 @@ export function migrationFiles(): string[] {
  * @returns names of the migrations that were run, in order
  */
 export async function migrate(sequelize: Sequelize, { to }: { to?: string } = {}): Promise<string[]> {
-  const umzug = new Umzug({
+  const umzug = new Umzug<QueryInterface>({
     migrations: migrationFiles().map((name) => ({
       name,
-      up: async ({ context }) => {
+      up: async ({ context }: { context: QueryInterface }) => {
         const migration = (await import(pathToFileURL(path.join(folder, name)).href)) as Migration;
         await migration.up(context);
       },

@@ -67,9 +67,10 @@ export function parseLength(text: string, { defaultUnit, allowNegative = false }
     rest = rest.slice(match[0].length).trim();
     const number = readNumber(match);
     if (number === null) return no('zero-denominator', 'a fraction cannot have 0 below the line');
-    const unit: string | null = match[8] ?? (previousUnit === UNITS_PER_FOOT ? 'in' : previousUnit === null ? defaultUnit : null);
+    const unit: string | null =
+      match[8] ?? (previousUnit === UNITS_PER_FOOT ? 'in' : previousUnit === null ? defaultUnit : null);
     if (unit === null) return no('not-a-length', 'say the unit of each number');
-    const size = UNIT_SIZE[unit]!;
+    const size: number = UNIT_SIZE[unit]!;
     const termSystem = size === UNITS_PER_INCH || size === UNITS_PER_FOOT ? 'imperial' : 'metric';
     if (system !== null && system !== termSystem)
       return no('mixed-units', 'inches and millimetres are mixed; use one of them');
