@@ -12,8 +12,8 @@ const personName = z
   .trim()
   .min(1, 'Put in the name that your crew sees.')
   .max(80, 'At most 80 characters.')
-  // Direction marks and control characters could make one name look like another.
-  .regex(/^[^\p{Cc}\p{Cf}]*$/u, 'Letters, digits and punctuation only.');
+  // Control and direction characters could make a name look like another, or turn a page's text round.
+  .regex(/^[^\p{Cc}\u200e\u200f\u202a-\u202e\u2066-\u2069]*$/u, 'Letters, digits and punctuation only.');
 
 export const signUpForm = z.strictObject({ name: personName, email: emailAddress, password: newPassword });
 export const signInForm = z.strictObject({ email: emailAddress, password: typedPassword });

@@ -1,0 +1,143 @@
+import { MAX_PLAN_BYTES, MAX_PLAN_DEPTH, planDocumentSchema, type PlanDocument } from './document';
+import { checkIntegrity } from './integrity';
+import { pathText, type PlanProblem } from './plan-problem';
+
+export const MAX_PROBLEMS = 50;
+
+export type ReadPlanResult = { ok: true; plan: PlanDocument } | { ok: false; problems: PlanProblem[] };
+
+/**
+ * Reads a plan from JSON text or from a parsed value: size, depth, shape, then whether everything it refers to is there.
+ *
+ * @returns the plan, or up to {@link MAX_PROBLEMS} problems, each with its path and what was expected
+ */
+export function readPlan(input: unknown): ReadPlanResult {
+  let value = input;
+  if (typeof input === 'string') {
+    if (utf8Length(input) > MAX_PLAN_BYTES) {
+      return one(
+        '',
+        `a plan file of at most ${MAX_PLAN_BYTES / 1_000_000} MB`,
+        `The file is ${megabytes(utf8Length(input))} MB.`,
+      );
+    }
+    try {
+      value = JSON.parse(stripMark(input));
+    } catch (error) {
+      return one('', 'JSON text', `This is not JSON: ${jsonFault(input, error)}.`);
+    }
+  }
+  const tooDeep = pathBeyond(value, MAX_PLAN_DEPTH);
+  if (tooDeep !== null) {
+    return one(
+      tooDeep,
+      `nesting of at most ${MAX_PLAN_DEPTH} levels`,
+      'The document is nested deeper than a plan can be.',
+    );
+  }
+  if (typeof value !== 'object' || value === null || Array.isArray(value)) {
+    return one('', 'a plan document: a JSON object', `Here is ${nameOf(value)}.`);
+  }
+  const parsed = planDocumentSchema.safeParse(value);
+  if (!parsed.success) {
+    return {
+      ok: false,
+      problems: parsed.error.issues.slice(0, MAX_PROBLEMS).flatMap((issue) => shapeProblems(issue, value)),
+    };
+  }
+  const problems = checkIntegrity(parsed.data);
+  return problems.length > 0
+    ? { ok: false, problems: problems.slice(0, MAX_PROBLEMS) }
+    : { ok: true, plan: parsed.data };
+}
+
+type Issue = {
+  code: string;
+  path: PropertyKey[];
+  message: string;
+  expected?: string;
+  keys?: string[];
+  values?: unknown[];
+};
+
+function shapeProblems(issue: Issue, root: unknown): PlanProblem[] {
+  const path = pathText(issue.path);
+  const found = at(root, issue.path);
+  if (issue.code === 'unrecognized_keys') {
+    return (issue.keys ?? []).map((key) => ({
+      path: pathText([...issue.path, key]),
+      expected: 'only fields that a plan has',
+      message: `A plan has no field "${key}" here.`,
+    }));
+  }
+  const expected =
+    issue.code === 'invalid_value' && issue.values
+      ? issue.values.map((value) => JSON.stringify(value)).join(' or ')
+      : issue.code === 'invalid_type'
+        ? words(issue.expected ?? issue.message)
+        : issue.code === 'invalid_union'
+          ? 'one of the forms that the plan document describes'
+          : issue.message;
+  const message = found === undefined ? `"${path}" is missing.` : `"${path}" is ${nameOf(found)}.`;
+  return [{ path, expected, message }];
+}
+
+function words(type: string): string {
+  const known: Record<string, string> = {
+    int: 'a whole number',
+    number: 'a number',
+    string: 'text',
+    array: 'a list',
+    object: 'an object',
+    boolean: 'true or false',
+    tuple: 'a list',
+  };
+  return known[type] ?? type;
+}
+
+function nameOf(value: unknown): string {
+  if (value === null) return 'null';
+  if (Array.isArray(value)) return `a list of ${value.length}`;
+  if (typeof value === 'object') return 'an object';
+  if (value === undefined) return 'nothing';
+  const text = JSON.stringify(value) ?? String(value);
+  return text.length > 60 ? `${text.slice(0, 57)}…` : text;
+}
+
+function at(root: unknown, path: readonly PropertyKey[]): unknown {
+  return path.reduce<unknown>((value, key) => (value as Record<PropertyKey, unknown> | undefined)?.[key], root);
+}
+
+/** Path of the first value nested deeper than `most`, or null. Iterative, since the input may be hostile. */
+function pathBeyond(root: unknown, most: number): string | null {
+  const stack: { value: unknown; path: PropertyKey[] }[] = [{ value: root, path: [] }];
+  for (let next = stack.pop(); next; next = stack.pop()) {
+    if (typeof next.value !== 'object' || next.value === null) continue;
+    if (next.path.length >= most) return pathText(next.path);
+    const entries = Array.isArray(next.value) ? next.value.map((v, i) => [i, v] as const) : Object.entries(next.value);
+    for (const [key, value] of entries) {
+      if (typeof value === 'object' && value !== null) stack.push({ value, path: [...next.path, key] });
+    }
+  }
+  return null;
+}
+
+function jsonFault(text: string, error: unknown): string {
+  const message = error instanceof Error ? error.message : String(error);
+  const position = /position (\d+)/.exec(message)?.[1];
+  const at = position === undefined ? text.length : Number(position);
+  const before = text.slice(0, at).split('\n');
+  return `line ${before.length}, column ${before.at(-1)!.length + 1} cannot be read`;
+}
+
+function one(path: string, expected: string, message: string): ReadPlanResult {
+  return { ok: false, problems: [{ path, expected, message }] };
+}
+
+/** A byte order mark is what some editors put before the text; it is no part of it. */
+const stripMark = (text: string) => text.replace(/^\ufeff/, '');
+const megabytes = (bytes: number) => (bytes / 1_000_000).toFixed(1);
+
+function utf8Length(text: string): number {
+  return new TextEncoder().encode(text).length;
+}
