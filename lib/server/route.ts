@@ -89,8 +89,8 @@ async function prepare<A extends Auth, B extends Schema, P extends Schema, Q ext
   const context = {
     account: signedIn?.account ?? null,
     session: signedIn?.session ?? null,
-    params: parseInput(spec.params, params, 'malformed'),
-    query: parseInput(spec.query, searchValues(request.url), 'malformed'),
+    params: spec.params && parseInput(spec.params, params, 'malformed'),
+    query: spec.query && parseInput(spec.query, searchValues(request.url), 'malformed'),
     body: changes && !takesBytes ? await parseBody(spec, request) : undefined,
     bytes: changes && takesBytes ? await readBytes(request, spec.maxBytes ?? DEFAULT_IMAGE_BYTES) : new Uint8Array(),
     request,

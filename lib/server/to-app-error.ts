@@ -12,7 +12,7 @@ export function toAppError(error: unknown, request: Request): AppError {
   const id = randomUUID();
   const { pathname } = new URL(request.url);
   log.error({ err: error, id, method: request.method, path: pathname }, 'a request failed');
-  if (error instanceof ConnectionError) {
+  if (isUnreachable(error)) {
     return new AppError('away', 'The records cannot be reached just now. Nothing was changed; try again in a minute.', {
       retryAfterS: 30,
       instance: `urn:uuid:${id}`,
@@ -23,4 +23,21 @@ export function toAppError(error: unknown, request: Request): AppError {
     `Something broke on our side and the request was not finished. Try again; if it stays so, tell whoever runs this site the number ${id}.`,
     { instance: `urn:uuid:${id}` },
   );
+}
+
+const unreachable = new Set([
+  'ECONNREFUSED',
+  'ECONNRESET',
+  'ETIMEDOUT',
+  'ENOTFOUND',
+  '53300',
+  '57P01',
+  '57P02',
+  '57P03',
+]);
+
+/** By Sequelize's class, or by the code of the socket or of PostgreSQL (appendix A, classes 53 and 57). */
+function isUnreachable(error: unknown): boolean {
+  if (error instanceof ConnectionError) return true;
+  return unreachable.has(String((error as { code?: unknown } | null)?.code));
 }

@@ -1,6 +1,7 @@
 import 'server-only';
 import { Op } from 'sequelize';
-import type { Account as AccountRow, Session as SessionRow } from '@/models';
+import type { Account as AccountRow } from '@/models/account';
+import type { Session as SessionRow } from '@/models/session';
 import { db } from '../db';
 import { readClaims, SESSION_IDLE_S, SESSION_MAX_AGE_S, type SessionClaims } from './session-cookie';
 

@@ -9,7 +9,7 @@ export const SESSION_MAX_AGE_S = 365 * 24 * 60 * 60;
 export const SESSION_IDLE_S = 60 * 24 * 60 * 60;
 
 /** What the cookie says: whose sign-in, and which. Whether it still stands is the session row's to say. */
-const claimsSchema = z.object({ sub: z.uuid(), sid: z.uuid() });
+export const claimsSchema = z.object({ sub: z.uuid(), sid: z.uuid() });
 export type SessionClaims = z.infer<typeof claimsSchema>;
 
 /** Cookies travel over https alone when the site's public address is https. */
@@ -24,8 +24,8 @@ export function sessionCookieName(): string {
 
 /** What a Cookie header claims, or null when it carries no sign-in of ours, or one that was tampered with or has run out. */
 export async function readClaims(cookieHeader: string | null): Promise<SessionClaims | null> {
-  const token = cookieValue(cookieHeader, sessionCookieName());
-  if (token === null) return null;
+  const token = readCookies(cookieHeader)[sessionCookieName()];
+  if (token === undefined) return null;
   let payload;
   try {
     payload = await decode({ token, secret: env().NEXTAUTH_SECRET });
@@ -37,12 +37,15 @@ export async function readClaims(cookieHeader: string | null): Promise<SessionCl
   return claims.success ? claims.data : null;
 }
 
-function cookieValue(header: string | null, name: string): string | null {
+/** The cookies of a Cookie header, by name; the first of a name counts. */
+export function readCookies(header: string | null): Record<string, string> {
+  const cookies: Record<string, string> = {};
   for (const part of header?.split(';') ?? []) {
     const equals = part.indexOf('=');
-    if (part.slice(0, equals).trim() === name) return decodeCookie(part.slice(equals + 1).trim());
+    const name = part.slice(0, Math.max(0, equals)).trim();
+    if (name && !Object.hasOwn(cookies, name)) cookies[name] = decodeCookie(part.slice(equals + 1).trim());
   }
-  return null;
+  return cookies;
 }
 
 function decodeCookie(value: string): string {

@@ -2,13 +2,12 @@ import type { z } from 'zod';
 import { AppError } from '../errors';
 
 /**
- * What came from outside, checked by its schema; undefined where the route declares none.
+ * What came from outside, checked by its schema.
  *
  * @param code  `malformed` for an address that our own pages never make, `invalid` for what a person filled in
  * @throws AppError with the fields and what each should be
  */
-export function parseInput(schema: z.ZodType | undefined, value: unknown, code: 'malformed' | 'invalid'): unknown {
-  if (!schema) return undefined;
+export function parseInput<S extends z.ZodType>(schema: S, value: unknown, code: 'malformed' | 'invalid'): z.output<S> {
   const result = schema.safeParse(value);
   if (result.success) return result.data;
   const fields = result.error.issues.map((issue) => ({ path: issue.path.join('.'), message: issue.message }));
