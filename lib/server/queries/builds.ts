@@ -1,0 +1,82 @@
+import 'server-only';
+import { emptyState } from '@/lib/domain/build/fold';
+import { progressOf, type Progress } from '@/lib/domain/build/progress';
+import type { BuildState } from '@/lib/domain/build/state';
+import type { PlanDocument } from '@/lib/domain/plan/document';
+import type { Build } from '@/models/build';
+import type { PlanRevision } from '@/models/plan-revision';
+import { db } from '../db';
+import type { CrewRole } from '../policies/build';
+
+export interface BuildRow {
+  id: string;
+  name: string;
+  planTitle: string;
+  role: CrewRole;
+  startedAt: string;
+  /** Receipt of the newest entry, or null before the first. */
+  lastEntryAt: string | null;
+  entries: number;
+  progress: Progress;
+}
+
+export interface BuildDetail {
+  build: Build;
+  revision: PlanRevision;
+  plan: PlanDocument;
+  state: BuildState;
+}
+
+/** Builds on whose crew a person is, newest activity first. */
+export async function listBuilds(accountId: string, now: number): Promise<BuildRow[]> {
+  const { CrewMember, Build } = db().models;
+  const memberships = await CrewMember.findAll({ where: { accountId, removedAt: null } });
+  const roles = new Map(memberships.map(({ buildId, role }) => [buildId, role]));
+  const builds = await Build.findAll({ where: { id: [...roles.keys()] } });
+  const rows = await Promise.all(
+    builds.map(async (build): Promise<BuildRow> => {
+      const [detail, lastEntryAt] = await Promise.all([readDetail(build), readLastEntryAt(build)]);
+      return {
+        id: build.id,
+        name: build.name,
+        planTitle: detail.plan.title,
+        role: roles.get(build.id)!,
+        startedAt: build.startedAt.toISOString(),
+        lastEntryAt,
+        entries: build.lastPosition,
+        progress: progressOf(detail.plan, detail.state, now),
+      };
+    }),
+  );
+  return rows.sort((a, b) => (b.lastEntryAt ?? b.startedAt).localeCompare(a.lastEntryAt ?? a.startedAt));
+}
+
+/** A build with its plan and folded state, or null. Who may see it is the caller's to ask. */
+export async function findBuild(buildId: string): Promise<BuildDetail | null> {
+  const build = await db().models.Build.findByPk(buildId);
+  return build && readDetail(build);
+}
+
+async function readDetail(build: Build): Promise<BuildDetail> {
+  const { PlanRevision, Snapshot } = db().models;
+  const [revision, snapshot] = await Promise.all([
+    PlanRevision.findByPk(build.planRevisionId, { rejectOnEmpty: true }),
+    Snapshot.findByPk(build.id),
+  ]);
+  return { build, revision, plan: revision.document, state: snapshot?.state ?? emptyState() };
+}
+
+async function readLastEntryAt(build: Build): Promise<string | null> {
+  if (build.lastPosition === 0) return null;
+  const row = await db().models.LogEntryRow.findOne({ where: { buildId: build.id, position: build.lastPosition } });
+  return row?.receivedAt.toISOString() ?? null;
+}
+
+/** Crew of a build with names, present members only. */
+export async function listCrew(buildId: string): Promise<{ accountId: string; name: string; role: CrewRole }[]> {
+  const { CrewMember, Account } = db().models;
+  const members = await CrewMember.findAll({ where: { buildId, removedAt: null }, order: [['joinedAt', 'ASC']] });
+  const accounts = await Account.findAll({ where: { id: members.map(({ accountId }) => accountId) } });
+  const names = new Map(accounts.map(({ id, name }) => [id, name]));
+  return members.map(({ accountId, role }) => ({ accountId, role, name: names.get(accountId)! }));
+}
