@@ -1,0 +1,71 @@
+import type { TimerTimes } from '../build/views';
+import type { GlueWindows } from './windows';
+
+export type TimerPhase = 'open' | 'in-clamps' | 'curing' | 'cured' | 'put-away';
+
+/** Where a glue timer stands. All times are absolute, ms since 1970, so sleep, reload and restart change nothing. */
+export interface TimerView {
+  timerId: string;
+  stepId: string;
+  phase: TimerPhase;
+  /** First glue. */
+  startedAt: number;
+  phaseStartedAt: number;
+  /** End of the phase: earliest solid, latest dashed. Null where the times of the glue are unknown. */
+  earliest: number | null;
+  latest: number | null;
+  /** Past the latest end of open time, or past the earliest end of clamping: someone should look. */
+  overdue: boolean;
+  /** How long past, ms; 0 when not overdue. */
+  overdueMs: number;
+  /** Clamps came off before the shortest clamp time. */
+  clampsOffEarly: boolean;
+  /** Full pressure came later than the longest assembly time. */
+  pressedLate: boolean;
+}
+
+const MINUTE = 60_000;
+
+/**
+ * Phase of a timer at `now`: open from first glue to clamps on, in clamps until someone says they are off, curing until
+ * the latest end of cure, then cured. Time alone never ends the first two: only a person does.
+ */
+export function timerView(timer: TimerTimes, windows: GlueWindows, now: number): TimerView {
+  const startedAt = timer.times['first-glue']!;
+  const clampsOn = timer.times['clamps-on'];
+  const clampsOff = timer.times['clamps-off'];
+  const base = { timerId: timer.timerId, stepId: timer.stepId, startedAt };
+  const early =
+    windows.known &&
+    clampsOn !== undefined &&
+    clampsOff !== undefined &&
+    clampsOff < clampsOn + windows.clamp.min * MINUTE;
+  const late = windows.known && clampsOn !== undefined && clampsOn > startedAt + windows.totalAssembly.max * MINUTE;
+  const view = (
+    phase: TimerPhase,
+    phaseStartedAt: number,
+    range: { min: number; max: number } | null,
+    due: 'min' | 'max' | 'never',
+  ): TimerView => {
+    const earliest = range && phaseStartedAt + range.min * MINUTE;
+    const latest = range && phaseStartedAt + range.max * MINUTE;
+    const dueAt = due === 'never' ? null : due === 'min' ? earliest : latest;
+    const overdue = dueAt !== null && now >= dueAt;
+    return {
+      ...base,
+      phase,
+      phaseStartedAt,
+      earliest,
+      latest,
+      overdue,
+      overdueMs: overdue ? now - dueAt : 0,
+      clampsOffEarly: early,
+      pressedLate: late,
+    };
+  };
+  if (timer.times['put-away'] !== undefined) return view('put-away', timer.times['put-away'], null, 'never');
+  if (clampsOn === undefined) return view('open', startedAt, windows.known ? windows.open : null, 'max');
+  if (clampsOff === undefined) return view('in-clamps', clampsOn, windows.known ? windows.clamp : null, 'max');
+  const curing = view('curing', clampsOn, windows.known ? windows.cure : null, 'never');
+  return curing.latest !== null && now >= curing.latest ? { ...curing, phase: 'cured' } : curing;
+}
