@@ -14,7 +14,7 @@ export interface TimerView {
   /** End of the phase: earliest solid, latest dashed. Null where the times of the glue are unknown. */
   earliest: number | null;
   latest: number | null;
-  /** Past the latest end of open time, or past the earliest end of clamping: someone should look. */
+  /** Past the latest end of open or clamp time: someone should look. */
   overdue: boolean;
   /** How long past, ms; 0 when not overdue. */
   overdueMs: number;
@@ -45,11 +45,11 @@ export function timerView(timer: TimerTimes, windows: GlueWindows, now: number):
     phase: TimerPhase,
     phaseStartedAt: number,
     range: { min: number; max: number } | null,
-    due: 'min' | 'max' | 'never',
+    due: 'latest' | 'never',
   ): TimerView => {
     const earliest = range && phaseStartedAt + range.min * MINUTE;
     const latest = range && phaseStartedAt + range.max * MINUTE;
-    const dueAt = due === 'never' ? null : due === 'min' ? earliest : latest;
+    const dueAt = due === 'never' ? null : latest;
     const overdue = dueAt !== null && now >= dueAt;
     return {
       ...base,
@@ -64,8 +64,8 @@ export function timerView(timer: TimerTimes, windows: GlueWindows, now: number):
     };
   };
   if (timer.times['put-away'] !== undefined) return view('put-away', timer.times['put-away'], null, 'never');
-  if (clampsOn === undefined) return view('open', startedAt, windows.known ? windows.open : null, 'max');
-  if (clampsOff === undefined) return view('in-clamps', clampsOn, windows.known ? windows.clamp : null, 'max');
+  if (clampsOn === undefined) return view('open', startedAt, windows.known ? windows.open : null, 'latest');
+  if (clampsOff === undefined) return view('in-clamps', clampsOn, windows.known ? windows.clamp : null, 'latest');
   const curing = view('curing', clampsOn, windows.known ? windows.cure : null, 'never');
   return curing.latest !== null && now >= curing.latest ? { ...curing, phase: 'cured' } : curing;
 }
