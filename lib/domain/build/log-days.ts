@@ -1,5 +1,6 @@
 import type { PlanDocument } from '../plan/document';
 import { describeEntry, type DescribeOptions } from './describe-entry';
+import { entryVersion } from './kinds';
 import { compareStanding, type StandingEntry } from './entry';
 import { isUndoable, undoneIds } from './undo';
 
@@ -56,7 +57,7 @@ export function logDays(
       kind: entry.kind,
       at: entry.madeAt,
       accountId: entry.accountId,
-      words: describeEntry(entry, plan, options),
+      words: entryVersion(entry.kind) ? describeEntry(entry, plan, options) : 'An entry of a newer version of Holdfast',
       undone: undone.has(entry.id),
       undoable: isUndoable(entry),
       held: entry.position === null,
