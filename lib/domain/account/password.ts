@@ -67,11 +67,11 @@ function repeats(plain: string): boolean {
 export const newPassword = z
   .string()
   .refine((value) => [...normalisePassword(value)].length >= MIN_PASSWORD, {
-    error: `At least ${MIN_PASSWORD} characters. A few words in a row are easy to remember.`,
+    error: `Too short: at least ${MIN_PASSWORD} characters.`,
     abort: true,
   })
   .refine((value) => [...normalisePassword(value)].length <= MAX_PASSWORD, {
-    error: `At most ${MAX_PASSWORD} characters.`,
+    error: `Too long: at most ${MAX_PASSWORD} characters.`,
     abort: true,
   })
   .refine((value) => !isCommonPassword(value), {

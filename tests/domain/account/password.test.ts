@@ -13,9 +13,9 @@ describe('a password that someone chooses', () => {
   );
 
   it('has 10 to 200 characters, counted as people count them', () => {
-    expect(messageFor('ninechars')).toEqual([expect.stringContaining('At least 10')]);
-    expect(messageFor('🪚🪵🔨🪛🪓')).toEqual([expect.stringContaining('At least 10')]);
-    expect(messageFor('ab '.repeat(67))).toEqual([expect.stringContaining('At most 200')]);
+    expect(messageFor('ninechars')).toEqual([expect.stringContaining('at least 10')]);
+    expect(messageFor('🪚🪵🔨🪛🪓')).toEqual([expect.stringContaining('at least 10')]);
+    expect(messageFor('ab '.repeat(67))).toEqual([expect.stringContaining('at most 200')]);
     expect(newPassword.safeParse(`${'plane iron '.repeat(18)}xy`).success).toBe(true);
   });
 
