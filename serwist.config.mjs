@@ -14,7 +14,7 @@ export default await serwist.withNextConfig((nextConfig) => {
       `${dist}/static/**/*.{js,css,woff2,wasm}`,
       `${dist}/server/app/bench.html`,
       'public/*.{png,svg,ico}',
-      'public/offline.html',
+      `${dist}/server/app/offline.html`,
     ],
     maximumFileSizeToCacheInBytes: 6_000_000,
     esbuildOptions: { minify: true },

@@ -8,7 +8,7 @@ import type { Account } from '../auth/read-session';
 import { db } from '../db';
 import { AppError } from '../errors';
 import { sha256, storeFile } from '../files/store-file';
-import { imageKind } from '../photos/image-kind';
+import { imageKind } from '@/lib/domain/build/image-kind';
 
 export interface ImportedPlan {
   planId: string;

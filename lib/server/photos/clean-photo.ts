@@ -1,7 +1,7 @@
 import 'server-only';
 import sharp from 'sharp';
 import { AppError } from '../errors';
-import { imageKind } from './image-kind';
+import { imageKind } from '@/lib/domain/build/image-kind';
 
 const MAX_PIXELS = 60_000_000;
 const MAX_SIDE = 4_096;
