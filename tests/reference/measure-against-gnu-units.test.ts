@@ -1,4 +1,4 @@
-import { execFileSync } from 'node:child_process';
+import { spawnSync } from 'node:child_process';
 import { describe, expect, it } from 'vitest';
 import { parseLength, UNITS_PER_MM } from '@/lib/domain/measure';
 
@@ -20,12 +20,9 @@ const cases: [ours: string, theirs: string][] = [
 ];
 
 describe('lengths against GNU units', () => {
-  const answers = execFileSync('units', ['--terse', '--digits', '15', '-f', ''], {
-    input: cases.map(([, theirs]) => `${theirs}\nmm\n`).join(''),
-    encoding: 'utf8',
-  })
-    .trim()
-    .split('\n');
+  const answers = askUnits(cases.map(([, theirs]) => `${theirs}\nmm\n`).join(''));
+
+  it('answers every question', () => expect(answers).toHaveLength(cases.length));
 
   it.each(cases.map(([ours, theirs], i) => ({ ours, theirs, mm: Number(answers[i]) })))(
     '$ours is $theirs',
@@ -37,3 +34,10 @@ describe('lengths against GNU units', () => {
     },
   );
 });
+
+function askUnits(input: string): string[] {
+  const run = spawnSync('units', ['--terse', '--digits', '15', '-f', ''], { input, encoding: 'utf8' });
+  if (run.error) throw new Error('This check needs GNU units: apt-get install units', { cause: run.error });
+  if (run.status !== 0) throw new Error(`units: ${run.stderr || run.stdout}`);
+  return run.stdout.trim().split('\n');
+}

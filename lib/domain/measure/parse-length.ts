@@ -1,7 +1,15 @@
 import { isLength, MAX_LENGTH, UNITS_PER_FOOT, UNITS_PER_INCH, UNITS_PER_MM, type Length } from './length';
 
 export type LengthProblem =
-  'empty' | 'not-a-length' | 'zero-denominator' | 'mixed-units' | 'negative' | 'too-long' | 'inches-past-a-foot';
+  | 'empty'
+  | 'not-a-length'
+  | 'zero-denominator'
+  | 'improper-fraction'
+  | 'ambiguous-comma'
+  | 'mixed-units'
+  | 'negative'
+  | 'too-long'
+  | 'inches-past-a-foot';
 
 export type ParsedLength =
   { ok: true; length: Length; rounded: boolean } | { ok: false; code: LengthProblem; message: string };
@@ -31,6 +39,9 @@ const WORDS: [RegExp, string][] = [
   [/\b(?:met(?:re|er)s?)\b/g, 'm'],
 ];
 
+/** More characters than any length needs; what is pasted by mistake is refused whole, never read in part. */
+const MAX_CHARACTERS = 120;
+
 const VULGAR = '¼½¾⅐⅑⅒⅓⅔⅕⅖⅗⅘⅙⅚⅛⅜⅝⅞↉';
 
 /** A number written one way: whole with fraction, fraction, decimal or whole; then its unit if any. */
@@ -39,7 +50,7 @@ const TERM =
 
 /**
  * Reads a length as people write it: `3 1/4`, `3-1/4"`, `3.25`, `8' 2 1/2"`, `8 ft`, `¾`, `82.5 mm`, `2 m`, `1 m 20 cm`;
- * a comma may stand for the decimal point. A bare number is in `defaultUnit`; a bare number after feet is inches.
+ * a comma may stand for the decimal point where it cannot be read as one that parts thousands. A bare number is in `defaultUnit`; a bare number after feet is inches.
  *
  * @returns the length in 1/640 mm and whether it had to be rounded to the nearest unit (0.8 µm), or what is wrong with it
  */
@@ -52,6 +63,7 @@ export function parseLength(text: string, { defaultUnit, allowNegative = false }
   });
   if (text.trim() === '')
     return { ok: false, code: 'empty', message: 'Put in a length, for example 3 1/4 or 82.5 mm.' };
+  if (text.trim().length > MAX_CHARACTERS) return no('not-a-length', 'it is too much text for one length');
 
   let rest = normalise(text);
   const negative = rest.startsWith('-');
@@ -67,6 +79,11 @@ export function parseLength(text: string, { defaultUnit, allowNegative = false }
     rest = rest.slice(match[0].length).trim();
     const number = readNumber(match);
     if (number === null) return no('zero-denominator', 'a fraction cannot have 0 below the line');
+    if (match[1] !== undefined && BigInt(match[2]!) >= BigInt(match[3]!))
+      return no('improper-fraction', 'the fraction after a whole number stays below 1');
+    // 3,250 is three thousand and more to one reader and three and a quarter to the next.
+    if (match[6] !== undefined && /^[1-9]\d{0,2},\d{3}$/.test(match[6]))
+      return no('ambiguous-comma', 'the comma could be a decimal point or part a thousand; use a point, or no comma');
     const unit: string | null =
       match[8] ?? (previousUnit === UNITS_PER_FOOT ? 'in' : previousUnit === null ? defaultUnit : null);
     if (unit === null) return no('not-a-length', 'say the unit of each number');
@@ -91,7 +108,7 @@ export function parseLength(text: string, { defaultUnit, allowNegative = false }
 }
 
 function normalise(text: string): string {
-  let clean = text.trim().toLowerCase().slice(0, 200);
+  let clean = text.trim().toLowerCase();
   for (const glyph of VULGAR) {
     if (clean.includes(glyph)) clean = clean.replaceAll(glyph, ` ${glyph.normalize('NFKC').replace('\u2044', '/')} `);
   }

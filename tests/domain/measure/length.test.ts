@@ -20,6 +20,11 @@ describe('parseLength', () => {
     ['3 - 1/4', inch(3.25)],
     ['3.25', inch(3.25)],
     ['3,25', inch(3.25)],
+    ['0,125', inch(0.125)],
+    ['1250,5 mm', 1250.5 * UNITS_PER_MM],
+    ['5/4', inch(1.25)],
+    ['64/256', inch(0.25)],
+    ['3/5 mm', 384],
     ['.5', inch(0.5)],
     ['3.', inch(3)],
     ['8\' 2 1/2"', inch(98.5)],
@@ -75,6 +80,14 @@ describe('parseLength', () => {
     ['9'.repeat(60), 'too-long'],
     ['1e3', 'not-a-length'],
     ['3 parsecs', 'not-a-length'],
+    ['3 5/4', 'improper-fraction'],
+    ['3 4/4', 'improper-fraction'],
+    ['1,250 mm', 'ambiguous-comma'],
+    ['12,500', 'ambiguous-comma'],
+    [`1 in${' '.repeat(200)}and more`, 'not-a-length'],
+    ['8 in 2 ft', 'not-a-length'],
+    ['3 //4', 'not-a-length'],
+    ['in', 'not-a-length'],
   ])('refuses %j as %s, in a sentence', (text, code) => {
     const result = inches(text);
     expect(result).toMatchObject({ ok: false, code });
