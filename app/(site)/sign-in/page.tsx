@@ -10,12 +10,13 @@ import { currentAccount } from '@/lib/server/auth/current-account';
 export const metadata: Metadata = { title: 'Sign in' };
 
 interface SignInPageProps {
-  searchParams: Promise<{ next?: string | string[] }>;
+  /** `return`: where the person was. */
+  searchParams: Promise<{ return?: string | string[] }>;
 }
 
 export default async function SignInPage({ searchParams }: SignInPageProps) {
-  const { next } = await searchParams;
-  const back = safeReturn(typeof next === 'string' ? next : null, '/desk');
+  const { return: asked } = await searchParams;
+  const back = safeReturn(typeof asked === 'string' ? asked : null, '/desk');
   if (await currentAccount()) redirect(back);
   return (
     <FormPage

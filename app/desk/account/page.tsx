@@ -4,6 +4,7 @@ import { ChangeEmailForm } from '@/components/account/change-email-form';
 import { ChangePasswordForm } from '@/components/account/change-password-form';
 import { NameForm } from '@/components/account/name-form';
 import { SessionList } from '@/components/account/session-list';
+import { SignOut } from '@/components/account/sign-out';
 import { requireSession } from '@/lib/server/auth/current-account';
 import { listSessions } from '@/lib/server/auth/sessions';
 
@@ -26,6 +27,9 @@ export default async function AccountPage() {
       </Part>
       <Part title="Signed in on">
         <SessionList sessions={sessions} />
+      </Part>
+      <Part title="Sign out">
+        <SignOut accountId={account.id} />
       </Part>
     </div>
   );

@@ -15,5 +15,5 @@ export async function currentAccount() {
 /** The same for a page that needs one: whoever is not signed in is sent to do so and comes back to `path`. */
 export async function requireSession(path: string): Promise<SignedIn> {
   const signedIn = await currentSession();
-  return signedIn ?? redirect(`/sign-in?next=${encodeURIComponent(path)}`);
+  return signedIn ?? redirect(`/sign-in?return=${encodeURIComponent(path)}`);
 }

@@ -29,13 +29,15 @@ export async function openSession(accountId: string, userAgent: string, now = ne
   return row.id;
 }
 
-/** Every sign-in of the account that still stands, the one last seen first. */
+/** Every sign-in of the account that still stands: the one that asks, then the one last seen. */
 export async function listSessions(accountId: string, currentId: string, now = new Date()): Promise<ListedSession[]> {
   const rows = await db().models.Session.findAll({
     where: { accountId, revokedAt: null, expiresAt: { [Op.gt]: now } },
     order: [['lastSeenAt', 'DESC']],
   });
-  return rows.map((row) => ({
+  const current = rows.filter((row) => row.id === currentId);
+  const others = rows.filter((row) => row.id !== currentId);
+  return [...current, ...others].map((row) => ({
     id: row.id,
     device: deviceWords(row.userAgent),
     signedInAt: row.createdAt.toISOString(),
