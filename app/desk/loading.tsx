@@ -1,0 +1,7 @@
+export default function Loading() {
+  return (
+    <p className="text-xl text-soft" role="status">
+      Fetching it …
+    </p>
+  );
+}
