@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { linkLook } from '@/components/ui/link-look';
 import { Notice } from '@/components/ui/notice';
+import { packCacheName } from '@/lib/device/pack';
 import { openAccountDatabase } from '@/lib/store/database';
 import { getKnownAccounts } from '@/lib/store/device-database';
 import { getHeldCounts, type HeldCounts } from '@/lib/store/queries/held';
@@ -104,7 +105,7 @@ async function heldHere(accountId: string): Promise<HeldCounts> {
 
 async function emptyHere(accountId: string): Promise<void> {
   if (await isKnownHere(accountId)) await discardAccount(await openAccountDatabase(accountId), 0, '');
-  if ('caches' in window) await caches.delete(`holdfast-pack-${accountId}`);
+  if ('caches' in window) await caches.delete(packCacheName(accountId));
 }
 
 /** Where the storage does not open, nothing in it is touched. */
