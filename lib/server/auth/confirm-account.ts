@@ -15,15 +15,23 @@ export async function confirmAccount(secret: string, password: string, now = new
   const { sequelize, models } = db();
   const token = await findToken(secret, 'confirm-email', now);
   const account = await models.Account.findByPk(token.accountId, { rejectOnEmpty: true });
-  if (!(await verifyPassword(account.passwordHash, password))) {
-    throw new AppError(
-      'wrong-password',
-      'That is not the password of the last sign-up with this address. Try again, or set a new one under "Forgotten password"; that confirms the address as well.',
-    );
-  }
+  const { id, passwordHash } = account;
+  if (!(await verifyPassword(passwordHash, password))) throw wrongPassword();
   await sequelize.transaction(async (transaction) => {
     await useToken(token, transaction, now);
-    await account.update({ emailConfirmedAt: account.emailConfirmedAt ?? now }, { transaction });
+    // Only with the password that was checked: another sign-up with this address may have replaced it since.
+    const [confirmed] = await models.Account.update(
+      { emailConfirmedAt: account.emailConfirmedAt ?? now },
+      { where: { id, passwordHash }, transaction },
+    );
+    if (confirmed !== 1) throw wrongPassword();
   });
   return { email: account.email };
+}
+
+function wrongPassword(): AppError {
+  return new AppError(
+    'wrong-password',
+    'That is not the password of the last sign-up with this address. Try again, or set a new one under "Forgotten password"; that confirms the address as well.',
+  );
 }
