@@ -64,6 +64,12 @@ describe('delivering', () => {
     expect(box.letters).toHaveLength(0);
   });
 
+  it('tries again when the mail server does not take our password, which is nothing about the letter', async () => {
+    const { email } = await makeAccount();
+    box.locked = true;
+    await expect(deliverLetter({ letter: 'reset-password', email })).rejects.toThrow('did not take the letter');
+  });
+
   it('writes to nobody about an account that is not there', async () => {
     await deliverLetter({ letter: 'reset-password', email: 'unknown@example.org' });
     await deliverLetter({ letter: 'password-changed', accountId: '0198f0a0-0000-7000-8000-000000000001' });

@@ -86,4 +86,14 @@ describe('a request that changes something', () => {
       }
     }
   });
+
+  it('is let past the proof from another address that this server is reached by', async () => {
+    for (const change of changes) {
+      const headers = { host: '192.168.0.9:3000', origin: 'http://192.168.0.9:3000' };
+      const request = ownRequest('/api/x', { method: change.method, body: {}, headers });
+      request.headers.delete('sec-fetch-site');
+      const { code } = await refusedAs(change, request);
+      expect(code).not.toBe('foreign-request');
+    }
+  });
 });

@@ -5,8 +5,10 @@ import { afterAll, beforeAll, beforeEach } from 'vitest';
 /** A mail server of the test's own on the loopback, and what it was handed. */
 export interface LetterBox {
   letters: ParsedMail[];
-  /** Answers the next recipients with this status, until set back to null. */
+  /** Answers recipients with this status, until set back to null. */
   refuseWith: number | null;
+  /** Takes nobody's password, until set back to false. */
+  locked: boolean;
   /** Resolves with the letters once there are so many. */
   waitFor: (count: number) => Promise<ParsedMail[]>;
 }
@@ -17,6 +19,7 @@ export function useLetterBox(): LetterBox {
   const box: LetterBox = {
     letters: [],
     refuseWith: null,
+    locked: false,
     waitFor: (count) =>
       new Promise((resolve) => {
         waiting.push({ count, resolve });
@@ -30,9 +33,9 @@ export function useLetterBox(): LetterBox {
     disabledCommands: ['STARTTLS'],
     allowInsecureAuth: true,
     onAuth: ({ username, password }, _session, done) =>
-      username === 'holdfast' && password === 'let me post'
+      !box.locked && username === 'holdfast' && password === 'let me post'
         ? done(null, { user: username })
-        : done(new Error('wrong name or password')),
+        : done(Object.assign(new Error('wrong name or password'), { responseCode: 535 })),
     onRcptTo: (_address, _session: SMTPServerSession, done) =>
       box.refuseWith === null ? done() : done(Object.assign(new Error('not taken'), { responseCode: box.refuseWith })),
     onData(stream, _session, done) {
@@ -52,6 +55,7 @@ export function useLetterBox(): LetterBox {
   beforeEach(() => {
     box.letters.length = 0;
     box.refuseWith = null;
+    box.locked = false;
   });
   afterAll(() => new Promise<void>((resolve) => server.close(resolve)));
   return box;
