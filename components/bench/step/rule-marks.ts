@@ -66,7 +66,8 @@ export function numberedMarks(marks: readonly RuleMark[], heightPx: number, here
   const last = marks.length - 1;
   const numbered = new Set<number>();
   const free = (index: number) =>
-    Math.abs(y(index) - y(here)) >= POINTER_GAP && [...numbered].every((other) => Math.abs(y(index) - y(other)) >= LEAST_GAP);
+    Math.abs(y(index) - y(here)) >= POINTER_GAP &&
+    [...numbered].every((other) => Math.abs(y(index) - y(other)) >= LEAST_GAP);
   for (const index of [0, last, ...marks.keys()]) {
     const wanted = index === 0 || index === last || marks[index]!.stageStart;
     if (wanted && index !== here && free(index)) numbered.add(index);

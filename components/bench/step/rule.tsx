@@ -86,7 +86,13 @@ export function Rule({ marks, here, onMove }: RuleProps) {
       >
         <svg className="h-full w-[44px] overflow-visible" aria-hidden="true">
           {marks.map((each, index) => (
-            <Graduation key={each.stepId} mark={each} place={markPlace(index, marks.length)} pitch={pitch} numbered={numbered.has(index)} />
+            <Graduation
+              key={each.stepId}
+              mark={each}
+              place={markPlace(index, marks.length)}
+              pitch={pitch}
+              numbered={numbered.has(index)}
+            />
           ))}
           <Pointer place={markPlace(shown, marks.length)} number={mark.number} />
         </svg>
@@ -104,13 +110,31 @@ export function Rule({ marks, here, onMove }: RuleProps) {
   );
 }
 
-function Graduation({ mark, place, pitch, numbered }: { mark: RuleMark; place: number; pitch: number; numbered: boolean }) {
+function Graduation({
+  mark,
+  place,
+  pitch,
+  numbered,
+}: {
+  mark: RuleMark;
+  place: number;
+  pitch: number;
+  numbered: boolean;
+}) {
   const { stroke, width, dash } = STROKES[mark.look];
   const y = `${place * 100}%`;
   const from = mark.stageStart ? (numbered ? 8 + 7.5 * String(mark.number).length : 18) : 29;
   return (
     <>
-      <line x1={from} x2={EDGE} y1={y} y2={y} stroke={stroke} strokeWidth={Math.min(width, Math.max(1, pitch * 0.6))} strokeDasharray={dash} />
+      <line
+        x1={from}
+        x2={EDGE}
+        y1={y}
+        y2={y}
+        stroke={stroke}
+        strokeWidth={Math.min(width, Math.max(1, pitch * 0.6))}
+        strokeDasharray={dash}
+      />
       {numbered && (
         <text x={4} y={y} dy="0.36em" className="figures" fontSize={16} fontWeight={600} fill="var(--iron)">
           {mark.number}
@@ -124,7 +148,15 @@ function Pointer({ place, number }: { place: number; number: number }) {
   return (
     <svg y={`${place * 100}%`} overflow="visible">
       <path d="M2 0 12 -14H43V14H12Z" fill="var(--blue)" />
-      <text x={27.5} dy="0.36em" textAnchor="middle" className="figures" fontSize={19} fontWeight={600} fill="var(--on-blue)">
+      <text
+        x={27.5}
+        dy="0.36em"
+        textAnchor="middle"
+        className="figures"
+        fontSize={19}
+        fontWeight={600}
+        fill="var(--on-blue)"
+      >
         {number}
       </text>
     </svg>

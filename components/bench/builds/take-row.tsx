@@ -1,0 +1,93 @@
+'use client';
+import { useState } from 'react';
+import { askToPersist } from '@/lib/device/storage-health';
+import type { PackProgress, PackResult } from '@/lib/device/pack';
+import type { BuildRow } from '@/lib/store/rows';
+import { Button } from '@/components/ui/button';
+import { Notice } from '@/components/ui/notice';
+import { useAnnounce } from '../shell/announcer';
+import { goTo } from '../shell/address';
+import { useBench } from '../shell/bench-context';
+import type { ServerBuild } from './ask-for-builds';
+import { byteWords, packWords } from './pack-words';
+
+/** One build: taken with visible progress, verified, then said to be ready with its size. */
+export function TakeRow({ build, here }: { build: ServerBuild; here: BuildRow | undefined }) {
+  const { db } = useBench();
+  const announce = useAnnounce();
+  const [progress, setProgress] = useState<PackProgress | null>(null);
+  const [failed, setFailed] = useState<string | null>(null);
+
+  async function take() {
+    setFailed(null);
+    setProgress({ doneBytes: 0, allBytes: 0, file: '' });
+    // A meaningful moment to ask the browser to keep this storage; its answer stands in the settings.
+    void askToPersist();
+    const result = await download();
+    setProgress(null);
+    if (result.ok) announce(`${build.name} is ready with no signal`);
+    else setFailed(result.message);
+  }
+
+  async function download(): Promise<PackResult> {
+    try {
+      const { takeToBench } = await import('@/lib/device/pack');
+      return await takeToBench({
+        db,
+        buildId: build.id,
+        fetch: (input) => fetch(input, { cache: 'no-store' }),
+        caches: window.caches,
+        onProgress: setProgress,
+      });
+    } catch (error) {
+      console.error(error);
+      const why = error instanceof Error ? error.message : String(error);
+      return { ok: false, code: 'broken', message: `It was not taken (${why}). Try again.` };
+    }
+  }
+
+  return (
+    <div className="grid gap-3 rounded-plate border-2 border-iron bg-paper p-4">
+      <div>
+        <h2 className="text-[1.75rem]">{build.name}</h2>
+        {build.planTitle !== build.name && <p className="text-soft">{build.planTitle}</p>}
+      </div>
+      {here && !progress && <p className="font-semibold text-green">{packWords(here)}</p>}
+      {progress && (
+        <div>
+          <progress
+            className="h-4 w-full accent-blue"
+            value={progress.allBytes > 0 ? progress.doneBytes : undefined}
+            max={progress.allBytes || 1}
+            aria-label={`Taking ${build.name} to the bench`}
+          />
+          <p className="figures text-[1.0625rem]">
+            {progress.allBytes > 0
+              ? `${byteWords(progress.doneBytes)} of ${byteWords(progress.allBytes)}. ${progress.file}`
+              : 'Asking what it needs.'}
+          </p>
+        </div>
+      )}
+      {failed && (
+        <Notice tone="danger" title="Not ready." live="alert">
+          {failed} {here && 'What was ready before still is.'}
+        </Notice>
+      )}
+      <div className="grid gap-6 min-[420px]:grid-cols-2">
+        {here && (
+          <Button className="min-h-[81px]!" onClick={() => goTo({ buildId: build.id })}>
+            Open it
+          </Button>
+        )}
+        <Button
+          className="min-h-[81px]!"
+          pending={progress !== null}
+          pendingLabel="Taking it"
+          onClick={() => void take()}
+        >
+          {here ? 'Take it afresh' : 'Take it to the bench'}
+        </Button>
+      </div>
+    </div>
+  );
+}

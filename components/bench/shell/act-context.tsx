@@ -1,0 +1,129 @@
+'use client';
+import { useLiveQuery } from 'dexie-react-hooks';
+import { createContext, useCallback, useContext, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
+import { describeEntry } from '@/lib/domain/build/describe-entry';
+import { lastUndoable } from '@/lib/domain/build/undo';
+import { sessionsOf } from '@/lib/domain/build/views';
+import type { AccountDatabase } from '@/lib/store/database';
+import { getEntries } from '@/lib/store/queries/builds';
+import type { Saved } from '@/lib/store/saved';
+import { loadActs, type Acts } from './acts';
+import { useAnnounce } from './announcer';
+import { useBench } from './bench-context';
+import { useBuild } from './build-context';
+
+/** The last act of this phone, for the undo that stays until the next one. */
+export interface LastAct {
+  entryIds: string[];
+  words: string;
+  undone: boolean;
+}
+
+interface ActContextValue {
+  /**
+   * Does one act and, when it is durable, says so. Opens a session first when none is open.
+   *
+   * @param said  words for the undo bar and the live region
+   * @param run   the mutations; the first that is refused ends the act; none at all only opens the session
+   * @returns true when all of it was saved
+   */
+  act: (said: string, run: (acts: Acts, db: AccountDatabase) => Promise<Saved | Saved[]>) => Promise<boolean>;
+  last: LastAct | null;
+  undoLast: () => Promise<void>;
+  /** What went wrong with the last act, in words; null after one that was saved. */
+  fault: string | null;
+  dismissFault: () => void;
+}
+
+const ActContext = createContext<ActContextValue | null>(null);
+
+export function useActs(): ActContextValue {
+  const acts = useContext(ActContext);
+  if (!acts) throw new Error('useActs is used outside <ActProvider>');
+  return acts;
+}
+
+export function ActProvider({ children }: { children: ReactNode }) {
+  const { db, format } = useBench();
+  const { build, plan, state } = useBuild();
+  const announce = useAnnounce();
+  const [lastHere, setLastHere] = useState<LastAct | null>(null);
+  const [fault, setFault] = useState<string | null>(null);
+  const buildId = build.id;
+  const isOpen = useRef(false);
+  const sessionOpen = useMemo(() => sessionsOf(state).some(({ openedAt, closedAt }) => openedAt && !closedAt), [state]);
+
+  useEffect(() => {
+    isOpen.current = sessionOpen;
+  }, [sessionOpen]);
+  useEffect(() => {
+    // Ready before the first tap; an act that comes sooner waits for the same load.
+    loadActs().catch((error: unknown) => console.error(error));
+  }, []);
+
+  // After a reload the last act is read once from the log, so that a wrong tick before a dead battery can be undone.
+  const before = useLiveQuery(async () => lastUndoable(await getEntries(db, buildId), db.deviceId), [db, buildId]);
+  const last = useMemo<LastAct | null>(() => {
+    if (lastHere) return lastHere;
+    if (!before) return null;
+    return { entryIds: [before.id], words: describeEntry(before, plan, { formatLength: format }), undone: false };
+  }, [lastHere, before, plan, format]);
+
+  const attempt = useCallback(async (run: (acts: Acts) => Promise<Saved | Saved[]>): Promise<string[] | null> => {
+    try {
+      const results = [await run(await loadActs())].flat();
+      const refused = results.find((result) => !result.ok);
+      if (refused && !refused.ok) {
+        setFault(refused.message);
+        return null;
+      }
+      setFault(null);
+      return results.flatMap((result) => (result.ok ? [result.entryId] : []));
+    } catch (error) {
+      console.error(error);
+      const why = error instanceof Error ? error.message : String(error);
+      setFault(`Not saved (${why}). Try again; if it stays so, close Holdfast and open it again.`);
+      return null;
+    }
+  }, []);
+
+  const act = useCallback<ActContextValue['act']>(
+    async (said, run) => {
+      const entryIds = await attempt(async (acts) => {
+        if (!isOpen.current) {
+          const opened = await acts.openSession(db, { buildId, at: db.clock() });
+          if (!opened.ok) return opened;
+          isOpen.current = true;
+        }
+        return run(acts, db);
+      });
+      if (!entryIds) return false;
+      // Opening a session alone is nothing to undo.
+      if (entryIds.length > 0) setLastHere({ entryIds, words: said, undone: false });
+      announce(said);
+      return true;
+    },
+    [announce, attempt, buildId, db],
+  );
+
+  const undoLast = useCallback(async () => {
+    if (!last) return;
+    const undone = !last.undone;
+    const order = undone ? [...last.entryIds].reverse() : last.entryIds;
+    const done = await attempt(async (acts) => {
+      const results: Saved[] = [];
+      for (const entryId of order) results.push(await acts.undoEntry(db, { buildId, entryId, undone }));
+      return results;
+    });
+    if (!done) return;
+    setLastHere({ ...last, undone });
+    announce(undone ? `Undone: ${last.words}` : `Put back: ${last.words}`);
+  }, [announce, attempt, buildId, db, last]);
+
+  const dismissFault = useCallback(() => setFault(null), []);
+  const value = useMemo(
+    () => ({ act, last, undoLast, fault, dismissFault }),
+    [act, last, undoLast, fault, dismissFault],
+  );
+  return <ActContext.Provider value={value}>{children}</ActContext.Provider>;
+}

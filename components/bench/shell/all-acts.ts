@@ -1,0 +1,12 @@
+export { addPhoto, captionPhoto } from '@/lib/store/mutations/add-photo';
+export { markPiece } from '@/lib/store/mutations/mark-piece';
+export { markStep } from '@/lib/store/mutations/mark-step';
+export { markTimer, startTimer } from '@/lib/store/mutations/mark-timer';
+export { closeSession, openSession } from '@/lib/store/mutations/open-session';
+export { recordCheck } from '@/lib/store/mutations/record-check';
+export { recordDeparture } from '@/lib/store/mutations/record-departure';
+export { removeItem } from '@/lib/store/mutations/remove-item';
+export { setKeySize } from '@/lib/store/mutations/set-key-size';
+export { reviseMeasurement, takeMeasurement } from '@/lib/store/mutations/take-measurement';
+export { undoEntry } from '@/lib/store/mutations/undo-entry';
+export { reviseNote, writeNote } from '@/lib/store/mutations/write-note';
