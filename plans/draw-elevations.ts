@@ -5,7 +5,7 @@ type Box = PlanDocumentInput['placements'][number];
 type View = { title: string; across: (box: Box) => [number, number]; depth: (box: Box) => number };
 
 const WIDTH = 1_200;
-const HEIGHT = 760;
+const MOST_HIGH = 560;
 const views: View[] = [
   { title: 'Front', across: ({ x, size }) => [x, size[0]], depth: ({ z, size }) => z + size[2] },
   { title: 'Right side', across: ({ z, size }) => [-(z + size[2]), size[2]], depth: ({ x, size }) => x + size[0] },
@@ -25,13 +25,14 @@ export function drawElevations(plan: PlanDocumentInput): string {
   const gap = 220;
   const scale = Math.min(
     (WIDTH - 180 - gap) / spans.reduce((sum, { from, to }) => sum + to - from, 0),
-    (HEIGHT - 200) / top,
+    MOST_HIGH / top,
   );
+  const height = Math.ceil(top * scale) + 190;
   let left = 60;
   const drawn = views.map((view, i) => {
     const { from, to } = spans[i]!;
     const x = (value: number) => left + (value - from) * scale;
-    const y = (value: number) => HEIGHT - 110 - value * scale;
+    const y = (value: number) => height - 110 - value * scale;
     // What is nearer covers what is behind it.
     const rects = [...boxes]
       .sort((a, b) => view.depth(a) - view.depth(b))
@@ -45,7 +46,7 @@ export function drawElevations(plan: PlanDocumentInput): string {
       });
     const label = (text: string, cx: number, cy: number, turn = '') =>
       `<text x="${cx}" y="${cy}" text-anchor="middle"${turn}>${text}</text>`;
-    const base = HEIGHT - 70;
+    const base = height - 70;
     const across = `<path d="M${x(from)} ${base}H${x(to)}M${x(from)} ${base - 8}v16M${x(to)} ${base - 8}v16"/>`;
     const side = x(to) + 40;
     const up = `<path d="M${side} ${y(0)}V${y(top)}M${side - 8} ${y(0)}h16M${side - 8} ${y(top)}h16"/>`;
@@ -63,5 +64,5 @@ export function drawElevations(plan: PlanDocumentInput): string {
     left = x(to) + gap - 60;
     return `<g fill="none" stroke="#191c1e" stroke-width="1.5">${rects.join('')}${across}${up}</g><g fill="#191c1e" font-family="DejaVu Sans, sans-serif" font-size="24">${texts.join('')}</g>`;
   });
-  return `<svg xmlns="http://www.w3.org/2000/svg" width="${WIDTH}" height="${HEIGHT}"><rect width="100%" height="100%" fill="#f7f4ec"/>${drawn.join('')}</svg>`;
+  return `<svg xmlns="http://www.w3.org/2000/svg" width="${WIDTH}" height="${height}"><rect width="100%" height="100%" fill="#f7f4ec"/>${drawn.join('')}</svg>`;
 }

@@ -4,8 +4,8 @@ import sharp from 'sharp';
 import type { PlanDocumentInput } from '@/lib/domain/plan/document';
 import { readPlan } from '@/lib/domain/plan/read-plan';
 import { drawElevations } from '@/plans/draw-elevations';
-import { foldingTrestles } from '@/plans/folding-trestles';
-import { hallBench } from '@/plans/hall-bench';
+import { foldingTrestles } from '@/plans/folding-trestles/index';
+import { hallBench } from '@/plans/hall-bench/index';
 
 /**
  * Writes plans/*.json from their sources: npx tsx scripts/write-plans.ts
