@@ -43,7 +43,7 @@ function Work({ operation }: { operation: PlanStep['operation'] }) {
     case 'glue-up':
       return <path d="M2 14h60" strokeWidth={3} strokeDasharray="1 4" strokeLinecap="round" />;
     default:
-      return null;
+      return <path d="M16 14h32m-6-5 6 5-6 5" />;
   }
 }
 
@@ -64,7 +64,7 @@ export function PartGlyph({ part, operation, stock }: PartGlyphProps) {
         <path d={stock === 'sheet' ? 'M1 -4h62v36H1z' : 'M1 1h62v26H1z'} strokeWidth={2} />
         <Work operation={operation} />
         {part.grain !== 'any' && stock === 'sheet' && (
-          <path d={part.grain === 'along' ? 'M8 24h24m-5-4 5 4-5 4' : 'M12 26V6m-4 5 4-5 4 5'} />
+          <path d={part.grain === 'along' ? 'M8 27h20m-5-4 5 4-5 4' : 'M10 28V8m-4 5 4-5 4 5'} />
         )}
         {part.referenceFace && <path d="M44 27l4-7 4 7" strokeWidth={2} />}
       </g>

@@ -8,7 +8,7 @@ import type { EntryRow } from '@/lib/store/rows';
 import { dayAndTime } from '@/components/bench/entry/time-words';
 import { useClock } from '@/components/bench/entry/use-clock';
 import { useBench } from '@/components/bench/shell/bench-context';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '@/components/bench/entry/act-button';
 
 /** What the server refused, each with its reason and its words, which can be copied. Nothing leaves by itself. */
 export function RefusedTray() {
@@ -67,9 +67,9 @@ function RefusedEntry({ entry, when }: { entry: EntryRow; when: string }) {
         <span className="text-soft">{when}</span> {words}
       </p>
       <p className="font-semibold text-red">{entry.refusal?.message ?? 'Refused'}</p>
-      <Button className="min-h-[81px]! justify-self-start" onClick={() => void copy()}>
+      <ActButton className="justify-self-start" onClick={() => void copy()}>
         {copied === 'yes' ? 'Copied' : 'Copy its words'}
-      </Button>
+      </ActButton>
       {copied === 'failed' && <p>This browser does not let it be copied. Save as a file instead.</p>}
     </div>
   );

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { DISCARD_WORD, discardAccount, keepHere } from '@/lib/store/sign-out';
 import { packCacheName } from '@/lib/device/pack';
 import { Button } from '@/components/ui/button';
+import { ActButton } from '@/components/bench/entry/act-button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { useBench } from '@/components/bench/shell/bench-context';
@@ -64,12 +65,10 @@ export function SignOutForm({ onLeave }: { onLeave: () => void }) {
             Send them now
           </Button>
           <div className="grid grid-cols-2 gap-6">
-            <Button className="min-h-[81px]!" pending={busy} onClick={() => void leave('keep')}>
+            <ActButton pending={busy} onClick={() => void leave('keep')}>
               Keep them here, sign out
-            </Button>
-            <Button className="min-h-[81px]!" onClick={() => void exportHeld()}>
-              Save them as a file
-            </Button>
+            </ActButton>
+            <ActButton onClick={() => void exportHeld()}>Save them as a file</ActButton>
           </div>
           <Field
             label={`Or throw them away: type ${DISCARD_WORD}`}
@@ -83,15 +82,14 @@ export function SignOutForm({ onLeave }: { onLeave: () => void }) {
               onChange={(event) => setTyped(event.target.value)}
             />
           </Field>
-          <Button
+          <ActButton
             kind="danger"
-            className="min-h-[81px]!"
             disabled={typed.trim().toLowerCase() !== DISCARD_WORD}
             pending={busy}
             onClick={() => void leave('discard')}
           >
             Throw them away, sign out
-          </Button>
+          </ActButton>
         </>
       ) : (
         <>
@@ -102,9 +100,7 @@ export function SignOutForm({ onLeave }: { onLeave: () => void }) {
           </Button>
         </>
       )}
-      <Button className="min-h-[81px]!" onClick={onLeave}>
-        Stay signed in
-      </Button>
+      <ActButton onClick={onLeave}>Stay signed in</ActButton>
     </div>
   );
 }

@@ -4,7 +4,7 @@ import { useClock } from '@/components/bench/entry/use-clock';
 import { Frame } from '@/components/bench/shell/frame';
 import { OutsideFoot } from '@/components/bench/shell/outside-foot';
 import { ViewHeading } from '@/components/bench/shell/view-heading';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '@/components/bench/entry/act-button';
 import { linkLook } from '@/components/ui/link-look';
 import { Notice } from '@/components/ui/notice';
 import type { SyncStatus } from '@/lib/store/rows';
@@ -77,17 +77,12 @@ export function SyncView({ buildId }: { buildId: string | null }) {
           ))}
         </dl>
         <div className="grid grid-cols-2 gap-6">
-          <Button
-            className="min-h-[81px]!"
-            pending={status.state === 'sending'}
-            pendingLabel="Sending"
-            onClick={() => void sendNow()}
-          >
+          <ActButton pending={status.state === 'sending'} pendingLabel="Sending" onClick={() => void sendNow()}>
             Send now
-          </Button>
-          <Button className="min-h-[81px]!" disabled={count + held.refused === 0} onClick={() => void exportHeld()}>
+          </ActButton>
+          <ActButton disabled={count + held.refused === 0} onClick={() => void exportHeld()}>
             Save as a file
-          </Button>
+          </ActButton>
         </div>
         <RefusedTray />
       </div>

@@ -32,7 +32,7 @@ export function UpdatePrompt() {
   return (
     <div role="status" className="flex items-center justify-between gap-3 border-b-2 border-iron bg-paper pl-4">
       <p className="text-[1.0625rem]">A newer Holdfast is here. What you did is kept.</p>
-      <Button kind="plain" className="shrink-0 border-l border-line text-blue" onClick={ready}>
+      <Button kind="plain" className="shrink-0 border-l border-line text-blue!" onClick={ready}>
         Change over
       </Button>
     </div>

@@ -39,7 +39,7 @@ export function BuildsView() {
         {builds && (
           <Button
             kind={builds.length === 0 ? 'plate' : 'act'}
-            className={builds.length === 0 ? '' : 'min-h-[81px]!'}
+            className={builds.length === 0 ? '' : 'min-h-[81px]! text-[1.3125rem]!'}
             onClick={() => goTo({ view: 'take' })}
           >
             Take a build to the bench

@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { askToPersist } from '@/lib/device/storage-health';
 import type { PackProgress, PackResult } from '@/lib/device/pack';
 import type { BuildRow } from '@/lib/store/rows';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Notice } from '@/components/ui/notice';
 import { useAnnounce } from '../shell/announcer';
 import { goTo } from '../shell/address';
@@ -74,19 +74,10 @@ export function TakeRow({ build, here }: { build: ServerBuild; here: BuildRow | 
         </Notice>
       )}
       <div className="grid gap-6 min-[420px]:grid-cols-2">
-        {here && (
-          <Button className="min-h-[81px]!" onClick={() => goTo({ buildId: build.id })}>
-            Open it
-          </Button>
-        )}
-        <Button
-          className="min-h-[81px]!"
-          pending={progress !== null}
-          pendingLabel="Taking it"
-          onClick={() => void take()}
-        >
+        {here && <ActButton onClick={() => goTo({ buildId: build.id })}>Open it</ActButton>}
+        <ActButton pending={progress !== null} pendingLabel="Taking it" onClick={() => void take()}>
           {here ? 'Take it afresh' : 'Take it to the bench'}
-        </Button>
+        </ActButton>
       </div>
     </div>
   );

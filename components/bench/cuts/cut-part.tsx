@@ -3,7 +3,7 @@ import { pieceNumbers } from '@/lib/domain/build/progress';
 import { pieceMark } from '@/lib/domain/build/views';
 import { findPart } from '@/lib/domain/plan/find';
 import type { ResolvedPart } from '@/lib/domain/plan/resolve-parts';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { SizeText } from '../entry/size-text';
 import { useActs } from '../shell/act-context';
 import { useBench } from '../shell/bench-context';
@@ -47,7 +47,7 @@ export function CutPart({ resolved, tickable }: { resolved: ResolvedPart; tickab
               Cut first to <SizeText sizes={roughSizes.map(format)} className="font-semibold" />
             </p>
           )}
-          {part.referenceFace && <p className="text-[1.0625rem] text-soft">Mark from {part.referenceFace}</p>}
+          {part.referenceFace && <p className="text-[1.0625rem] text-soft">Reference: {part.referenceFace}</p>}
           {part.selection && <p className="text-[1.0625rem] text-soft">{part.selection}</p>}
           {waits.length > 0 && (
             <p className="text-[1.0625rem] font-semibold text-blue">Not measured yet: {waits.join(', ')}</p>
@@ -61,12 +61,12 @@ export function CutPart({ resolved, tickable }: { resolved: ResolvedPart; tickab
             const hand = handOfPiece(part, piece);
             const name = `${part.label}, piece ${piece} of ${part.quantity}${hand ? `, ${hand}-handed` : ''}`;
             return (
-              <Button
+              <ActButton
                 key={piece}
                 aria-pressed={cut}
                 aria-label={name}
                 disabled={readOnly}
-                className={`flex min-h-[81px]! items-center justify-center gap-2 px-2! ${cut ? 'border-green! text-green!' : ''}`}
+                className={`flex items-center justify-center gap-2 ${cut ? 'border-green! text-green!' : ''}`}
                 onClick={() =>
                   void act(`${name}: ${cut ? 'not cut after all' : 'cut'}`, (acts, db) =>
                     acts.markPiece(db, { buildId: build.id, partId: part.id, piece, mark: cut ? 'open' : 'cut' }),
@@ -75,10 +75,10 @@ export function CutPart({ resolved, tickable }: { resolved: ResolvedPart; tickab
               >
                 {cut && <Tick size={26} />}
                 <span className="text-[1.25rem]">
-                  {part.quantity > 1 ? piece : part.label}
+                  {part.quantity > 1 ? piece : 'Cut'}
                   {hand && <span className="block text-[1rem] leading-tight font-medium">{HAND[hand]}</span>}
                 </span>
-              </Button>
+              </ActButton>
             );
           })}
         </div>

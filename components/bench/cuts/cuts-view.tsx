@@ -1,5 +1,6 @@
 'use client';
 import { progressOf } from '@/lib/domain/build/progress';
+import { TrueFractions } from '../entry/true-fractions';
 import { SizeText } from '../entry/size-text';
 import { useClock } from '../entry/use-clock';
 import { useBench } from '../shell/bench-context';
@@ -48,7 +49,7 @@ function Group({ group }: { group: CutGroup }) {
     <section aria-labelledby={id}>
       <div className="border-b-2 border-iron pb-1">
         <h2 id={id} className="text-[1.5rem]">
-          {stock.name}
+          <TrueFractions text={stock.name} />
         </h2>
         <p className="text-[1.0625rem] text-soft">
           {section ? (
@@ -57,7 +58,7 @@ function Group({ group }: { group: CutGroup }) {
               {stock.kind === 'lumber' && stock.nominal}
             </>
           ) : (
-            <>sheet {stock.kind === 'sheet' && stock.nominalThickness}</>
+            <TrueFractions text={stock.kind === 'sheet' ? `sheet, sold as ${stock.nominalThickness}` : ''} />
           )}
         </p>
       </div>

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { saveEmergencyCard } from '@/lib/store/mutations/save-emergency-card';
 import type { EmergencyCard } from '@/lib/store/rows';
 import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { useAnnounce } from '../shell/announcer';
@@ -59,9 +60,7 @@ export function CardForm({ card, onDone }: { card: EmergencyCard | null; onDone:
       <Button kind="plate" onClick={() => void keep()}>
         Keep the card
       </Button>
-      <Button className="min-h-[81px]!" onClick={onDone}>
-        Leave it as it was
-      </Button>
+      <ActButton onClick={onDone}>Leave it as it was</ActButton>
     </div>
   );
 }

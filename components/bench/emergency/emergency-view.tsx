@@ -2,6 +2,7 @@
 import { useLiveQuery } from 'dexie-react-hooks';
 import { useState } from 'react';
 import { getEmergencyCard } from '@/lib/store/queries/held';
+import { ActButton } from '../entry/act-button';
 import { Button } from '@/components/ui/button';
 import { linkLook } from '@/components/ui/link-look';
 import { useBench } from '../shell/bench-context';
@@ -56,9 +57,13 @@ export function EmergencyView({ buildId }: { buildId: string | null }) {
             <p className="text-[1.0625rem] text-soft">
               What the person on the telephone tells you comes before this card.
             </p>
-            <Button className="min-h-[81px]!" onClick={() => setEditing(true)}>
-              {card ? 'Change the card' : 'Fill in the card'}
-            </Button>
+            {number ? (
+              <ActButton onClick={() => setEditing(true)}>Change the card</ActButton>
+            ) : (
+              <Button kind="plate" onClick={() => setEditing(true)}>
+                Fill in the card
+              </Button>
+            )}
           </>
         )}
         {row && editing && <CardForm card={card ?? null} onDone={() => setEditing(false)} />}

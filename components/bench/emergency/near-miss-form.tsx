@@ -1,6 +1,6 @@
 'use client';
 import { useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { useDraft } from '../entry/use-draft';
@@ -43,9 +43,7 @@ export function NearMissForm({ buildId }: { buildId: string }) {
       <Field label="What, and what you will do otherwise" error={fault ?? draft.fault ?? undefined}>
         <textarea rows={3} value={draft.text} onChange={(event) => draft.setText(event.target.value)} />
       </Field>
-      <Button className="min-h-[81px]!" onClick={() => void keep()}>
-        Write it down
-      </Button>
+      <ActButton onClick={() => void keep()}>Write it down</ActButton>
       {kept && draft.text === '' && (
         <Notice tone="done" live="status">
           It is in the build log.

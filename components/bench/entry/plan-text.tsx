@@ -20,17 +20,4 @@ function Plain() {
 }
 
 // Pictures in a plan are attachments, kept in the pack and shown as drawings; an address in its words is not fetched.
-const Markdown = dynamic(
-  () =>
-    import('react-markdown').then(({ default: Renderer }) => {
-      function PlanMarkdown({ children }: { children: string }) {
-        return (
-          <Renderer disallowedElements={['img']} unwrapDisallowed>
-            {children}
-          </Renderer>
-        );
-      }
-      return PlanMarkdown;
-    }),
-  { loading: Plain },
-);
+const Markdown = dynamic(() => import('./plan-markdown').then((m) => m.PlanMarkdown), { loading: Plain });

@@ -83,7 +83,7 @@ function Row({ item }: { item: LogItem }) {
       {item.undoable && !readOnly && (
         <Button
           kind="plain"
-          className="text-blue"
+          className="text-blue!"
           aria-label={`${item.undone ? 'Put back' : 'Undo'}: ${item.words.slice(0, 80)}`}
           onClick={() =>
             void act(`${item.undone ? 'Put back' : 'Undone'}: ${item.words}`, async (acts, db) => {

@@ -22,7 +22,7 @@ export function MoreView() {
     {
       to: { buildId, view: 'sizes' },
       word: 'Measure',
-      says: `${count(plan.keySizes.filter((size) => size.takeFromWork).length, 'size', 'sizes')} to take from the work, ${measurementsOf(state).length} measured besides`,
+      says: `${plan.keySizes.filter((size) => size.takeFromWork).length} sizes to take from the work; besides, ${measurementsOf(state).length} measured`,
     },
     { to: { buildId, view: 'close' }, word: 'Close down', says: 'The end of a session' },
     {

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import type { notesOf } from '@/lib/domain/build/views';
 import { findStep, stepNumber } from '@/lib/domain/plan/find';
 import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { dayAndTime } from '../entry/time-words';
 import { useClock } from '../entry/use-clock';
@@ -39,18 +40,15 @@ export function NoteItem({ note }: { note: ReturnType<typeof notesOf>[number] })
           <textarea rows={4} value={text} onChange={(event) => draft.setText(event.target.value)} />
         </Field>
         <div className="grid grid-cols-2 gap-6">
-          <Button
-            className="min-h-[81px]!"
+          <ActButton
             onClick={() => {
               draft.clear();
               setEditing(false);
             }}
           >
             Leave it as it was
-          </Button>
-          <Button className="min-h-[81px]!" onClick={() => void keep()}>
-            Keep it
-          </Button>
+          </ActButton>
+          <ActButton onClick={() => void keep()}>Keep it</ActButton>
         </div>
       </div>
     );
@@ -71,12 +69,12 @@ export function NoteItem({ note }: { note: ReturnType<typeof notesOf>[number] })
       </div>
       {!readOnly && (
         <div className="grid shrink-0">
-          <Button kind="plain" className="text-blue" onClick={() => setEditing(true)}>
+          <Button kind="plain" className="text-blue!" onClick={() => setEditing(true)}>
             Change
           </Button>
           <Button
             kind="plain"
-            className="text-blue"
+            className="text-blue!"
             onClick={() =>
               void act('Note taken out', (acts, db) =>
                 acts.removeItem(db, { buildId: build.id, collection: 'notes', itemId: note.id }),

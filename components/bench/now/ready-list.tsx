@@ -2,7 +2,8 @@
 import { useState } from 'react';
 import type { StepSuggestion } from '@/lib/domain/build/what-now';
 import { findStep, stepNumber } from '@/lib/domain/plan/find';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
+import { TrueFractions } from '../entry/true-fractions';
 import { minutesWords } from '../entry/time-words';
 import { BenchLink } from '../shell/bench-link';
 import { useBuild } from '../shell/build-context';
@@ -29,7 +30,9 @@ export function ReadyList({ suggestions }: { suggestions: readonly StepSuggestio
             >
               <span className="figures text-[1.375rem] font-semibold">{stepNumber(plan, stepId)}</span>
               <span>
-                <span className="block font-semibold leading-snug">{findStep(plan, stepId)?.title}</span>
+                <span className="block font-semibold leading-snug">
+                  <TrueFractions text={findStep(plan, stepId)?.title ?? ''} />
+                </span>
                 <span className="block text-[1rem] text-soft">{why}</span>
               </span>
               <span className="figures text-[1.125rem]">{minutesWords(minutes)}</span>
@@ -38,9 +41,9 @@ export function ReadyList({ suggestions }: { suggestions: readonly StepSuggestio
         ))}
       </ul>
       {suggestions.length > SHOWN_FIRST && !all && (
-        <Button className="mt-3 min-h-[81px]! w-full" onClick={() => setAll(true)}>
+        <ActButton className="mt-3 w-full" onClick={() => setAll(true)}>
           {suggestions.length - SHOWN_FIRST} more that are ready
-        </Button>
+        </ActButton>
       )}
     </section>
   );

@@ -1,7 +1,7 @@
 'use client';
 import { useEffect, useRef, useState } from 'react';
 import { clearDraft, saveDraft } from '@/lib/store/mutations/save-draft';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Notice } from '@/components/ui/notice';
 import { useActs } from '../shell/act-context';
 import { useBench } from '../shell/bench-context';
@@ -83,17 +83,12 @@ export function PhotoButtons({ stepId, wantedId = null, of }: PhotoButtonsProps)
   return (
     <div className="grid gap-3">
       <div className="grid grid-cols-2 gap-6">
-        <Button
-          className="min-h-[81px]!"
-          pending={busy}
-          pendingLabel="Keeping it"
-          onClick={() => void ask(camera.current)}
-        >
+        <ActButton pending={busy} pendingLabel="Keeping it" onClick={() => void ask(camera.current)}>
           Camera
-        </Button>
-        <Button className="min-h-[81px]!" disabled={busy} onClick={() => void ask(gallery.current)}>
+        </ActButton>
+        <ActButton disabled={busy} onClick={() => void ask(gallery.current)}>
           From the gallery
-        </Button>
+        </ActButton>
       </div>
       <input
         {...files}

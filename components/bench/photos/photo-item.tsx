@@ -2,7 +2,7 @@
 import { useState } from 'react';
 import type { photosOf } from '@/lib/domain/build/views';
 import { findStep, stepNumber } from '@/lib/domain/plan/find';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { dayAndTime } from '../entry/time-words';
 import { useClock } from '../entry/use-clock';
@@ -44,11 +44,8 @@ export function PhotoItem({ photo }: { photo: ReturnType<typeof photosOf>[number
       </figcaption>
       {!readOnly && !editing && (
         <div className="grid grid-cols-2 gap-6">
-          <Button className="min-h-[81px]!" onClick={() => setEditing(true)}>
-            {value.caption ? 'Change caption' : 'Add a caption'}
-          </Button>
-          <Button
-            className="min-h-[81px]!"
+          <ActButton onClick={() => setEditing(true)}>{value.caption ? 'Change caption' : 'Add a caption'}</ActButton>
+          <ActButton
             onClick={() =>
               void act('Photo taken out', (acts, db) =>
                 acts.removeItem(db, { buildId: build.id, collection: 'photos', itemId: id }),
@@ -56,7 +53,7 @@ export function PhotoItem({ photo }: { photo: ReturnType<typeof photosOf>[number
             }
           >
             Take it out
-          </Button>
+          </ActButton>
         </div>
       )}
       {editing && (
@@ -64,9 +61,7 @@ export function PhotoItem({ photo }: { photo: ReturnType<typeof photosOf>[number
           <Field label="Caption">
             <input value={text} maxLength={500} onChange={(event) => caption.setText(event.target.value)} />
           </Field>
-          <Button className="min-h-[81px]!" onClick={() => void keep()}>
-            Keep the caption
-          </Button>
+          <ActButton onClick={() => void keep()}>Keep the caption</ActButton>
         </div>
       )}
     </figure>

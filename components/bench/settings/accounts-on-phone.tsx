@@ -2,7 +2,7 @@
 import { useLiveQuery } from 'dexie-react-hooks';
 import { useState } from 'react';
 import { getKnownAccounts } from '@/lib/store/device-database';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { SignOutForm } from '@/components/sync/sign-out-form';
 import { useBench } from '../shell/bench-context';
 
@@ -28,9 +28,7 @@ export function AccountsOnPhone() {
       {leaving ? (
         <SignOutForm onLeave={() => setLeaving(false)} />
       ) : (
-        <Button className="min-h-[81px]!" onClick={() => setLeaving(true)}>
-          Sign out
-        </Button>
+        <ActButton onClick={() => setLeaving(true)}>Sign out</ActButton>
       )}
     </section>
   );

@@ -1,7 +1,7 @@
 'use client';
 import { useEffect, useState } from 'react';
 import { askToPersist, storageHealth, type StorageHealth } from '@/lib/device/storage-health';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { byteWords } from '../builds/pack-words';
 
 /** What the browser says about keeping this phone's records; asked for, shown, and not promised. */
@@ -29,9 +29,7 @@ export function StorageAnswer() {
         {health.freeBytes !== null && ` About ${byteWords(health.freeBytes)} are free for it.`}
       </p>
       {health.persistent === false && (
-        <Button className="min-h-[81px]!" onClick={() => void askToPersist().then(() => setAsked(true))}>
-          Ask it to keep them
-        </Button>
+        <ActButton onClick={() => void askToPersist().then(() => setAsked(true))}>Ask it to keep them</ActButton>
       )}
       {asked && health.persistent === false && (
         <p className="text-soft">It said no for now. It may say yes when Holdfast is installed or used for a while.</p>

@@ -1,19 +1,11 @@
 'use client';
 import type { ReactNode } from 'react';
-import { useBenchAddress, type BenchView } from './address';
-import { BenchLink } from './bench-link';
+import { useBenchAddress } from './address';
+import { BuildWays } from './build-ways';
 import { useBuild } from './build-context';
 import { Frame } from './frame';
 import { TimerStrip } from '../timers/timer-strip';
 import { UndoBar } from './undo-bar';
-
-const WAYS: readonly { view: BenchView; word: string }[] = [
-  { view: 'now', word: 'What now' },
-  { view: 'steps', word: 'Steps' },
-  { view: 'cuts', word: 'Cut list' },
-  { view: 'timers', word: 'Timers' },
-  { view: 'more', word: 'More' },
-];
 
 interface BuildFrameProps {
   /** Other words at the foot than the ways about the build. */
@@ -35,30 +27,11 @@ export function BuildFrame({ foot, layout, children }: BuildFrameProps) {
       foot={
         <div>
           <UndoBar />
-          {foot ?? <Ways buildId={build.id} here={view} />}
+          {foot ?? <BuildWays buildId={build.id} />}
         </div>
       }
     >
       {children}
     </Frame>
-  );
-}
-
-function Ways({ buildId, here }: { buildId: string; here: BenchView }) {
-  return (
-    <nav className="bench-foot" aria-label="This build">
-      {WAYS.map(({ view, word }) => (
-        <BenchLink
-          key={view}
-          to={{ buildId, view }}
-          aria-current={view === here ? 'page' : undefined}
-          className={`flex items-center justify-center text-center font-figures text-[1.125rem] font-medium active:bg-line ${
-            view === here ? 'shadow-[inset_0_4px_0_var(--iron)]' : ''
-          }`}
-        >
-          {word}
-        </BenchLink>
-      ))}
-    </nav>
   );
 }

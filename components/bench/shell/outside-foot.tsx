@@ -1,5 +1,6 @@
 'use client';
 import { useBenchAddress, type BenchView } from './address';
+import { BuildWays } from './build-ways';
 import { BenchLink } from './bench-link';
 
 const WAYS: readonly { view: BenchView; word: string }[] = [
@@ -9,9 +10,10 @@ const WAYS: readonly { view: BenchView; word: string }[] = [
   { view: 'settings', word: 'Settings' },
 ];
 
-/** Ways about the bench where no build is open. */
+/** Ways about the bench where no build is open; the build's own where one was left for a moment. */
 export function OutsideFoot() {
-  const { view: here } = useBenchAddress();
+  const { view: here, buildId } = useBenchAddress();
+  if (buildId) return <BuildWays buildId={buildId} />;
   return (
     <nav className="bench-foot" aria-label="Bench">
       {WAYS.map(({ view, word }) => (

@@ -15,7 +15,14 @@ export function UndoBar() {
       </div>
     );
   }
-  if (!last) return null;
+  if (!last) {
+    // Its room is kept, so that the plate does not move from under the thumb at the first act.
+    return (
+      <p className="flex min-h-[64px] items-center border-t border-line bg-paper px-4 text-[1.0625rem] text-soft">
+        Nothing to undo yet.
+      </p>
+    );
+  }
   return (
     <Button
       kind="plain"

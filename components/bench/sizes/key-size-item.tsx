@@ -6,9 +6,11 @@ import { touchesOf } from '@/lib/domain/build/touches';
 import { measuredKeySizes } from '@/lib/domain/build/views';
 import { judgeKeySize } from '@/lib/domain/plan/judge-key-size';
 import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Notice } from '@/components/ui/notice';
 import { LengthEntry } from '../entry/length-entry';
 import { readLength } from '../entry/length-text-edit';
+import { TrueFractions } from '../entry/true-fractions';
 import { SizeText } from '../entry/size-text';
 import { useDraft } from '../entry/use-draft';
 import { useActs } from '../shell/act-context';
@@ -45,16 +47,18 @@ export function KeySizeItem({ size, startOpen }: { size: PlanKeySize; startOpen:
     <div className={`grid gap-3 rounded-plate border-2 bg-paper p-4 ${open ? 'border-blue' : 'border-iron'}`}>
       <div className="flex items-center justify-between gap-4">
         <div>
-          <h2 className="text-[1.5rem]">{size.name}</h2>
+          <h2 className="text-[1.5rem]">
+            <TrueFractions text={size.name} />
+          </h2>
           <p className={`font-semibold ${measured ? 'text-blue' : ''}`}>
             {value && <SizeText sizes={[format(value.length)]} className="text-[1.5rem]" />}{' '}
             {measured ? 'measured' : 'as drawn, not measured yet'}
           </p>
         </div>
         {!readOnly && (
-          <Button className="min-h-[81px]! shrink-0" aria-expanded={open} onClick={() => setOpen(!open)}>
+          <ActButton className="shrink-0" aria-expanded={open} onClick={() => setOpen(!open)}>
             {open ? 'Later' : measured ? 'Again' : 'Measure'}
-          </Button>
+          </ActButton>
         )}
       </div>
       {open && size.takeFromWork && (

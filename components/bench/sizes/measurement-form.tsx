@@ -1,6 +1,7 @@
 'use client';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { LengthEntry } from '../entry/length-entry';
 import { readLength } from '../entry/length-text-edit';
@@ -40,11 +41,7 @@ export function MeasurementForm({ stepId, startOpen }: { stepId: string | null; 
   }
 
   if (!open) {
-    return (
-      <Button className="min-h-[81px]!" onClick={() => setOpen(true)}>
-        Measure something else
-      </Button>
-    );
+    return <ActButton onClick={() => setOpen(true)}>Measure something else</ActButton>;
   }
   return (
     <div className="grid gap-4">

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import type { measurementsOf } from '@/lib/domain/build/views';
 import { findStep, stepNumber } from '@/lib/domain/plan/find';
 import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { LengthEntry } from '../entry/length-entry';
 import { readLength } from '../entry/length-text-edit';
@@ -37,7 +38,7 @@ export function MeasurementItem({ measurement }: { measurement: Measurement }) {
         </p>
       </div>
       {!readOnly && (
-        <Button kind="plain" className="min-h-[81px]! shrink-0 text-blue" onClick={() => setEditing(true)}>
+        <Button kind="plain" className="min-h-[81px]! shrink-0 text-blue!" onClick={() => setEditing(true)}>
           Change
         </Button>
       )}
@@ -92,15 +93,9 @@ function ChangeForm({ measurement, onDone }: { measurement: Measurement; onDone:
         showProblems={asked}
       />
       <div className="grid grid-cols-3 gap-4">
-        <Button className="min-h-[81px]! px-1!" onClick={onDone}>
-          Leave it
-        </Button>
-        <Button className="min-h-[81px]! px-1!" onClick={() => void takeOut()}>
-          Take it out
-        </Button>
-        <Button className="min-h-[81px]! px-1!" onClick={() => void keep()}>
-          Keep it
-        </Button>
+        <ActButton onClick={onDone}>Leave it</ActButton>
+        <ActButton onClick={() => void takeOut()}>Take it out</ActButton>
+        <ActButton onClick={() => void keep()}>Keep it</ActButton>
       </div>
     </div>
   );

@@ -1,4 +1,5 @@
 import type { PlanCaution } from '@/lib/domain/plan/document';
+import { TrueFractions } from '../entry/true-fractions';
 
 /** Cautions next to the action: what can hurt a person in red, first; what can spoil the work in iron. */
 export function Cautions({ cautions }: { cautions: readonly PlanCaution[] }) {
@@ -16,7 +17,7 @@ export function Cautions({ cautions }: { cautions: readonly PlanCaution[] }) {
           <b className={`font-figures text-[1.3125rem] font-semibold ${level === 'danger' ? 'text-red' : ''}`}>
             {about}.
           </b>{' '}
-          {what}
+          <TrueFractions text={what} />
         </li>
       ))}
     </ul>

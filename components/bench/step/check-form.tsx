@@ -4,7 +4,7 @@ import type { EntryValue } from '@/lib/domain/build/kinds';
 import { judgeCheck } from '@/lib/domain/build/judge-check';
 import type { PlanCheck, PlanStep } from '@/lib/domain/plan/document';
 import { evaluateSize } from '@/lib/domain/plan/key-sizes';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { LengthEntry } from '../entry/length-entry';
@@ -83,17 +83,11 @@ export function CheckForm({ step, check, onDone }: CheckFormProps) {
       )}
       {check.judge.kind === 'yes' ? (
         <div className="grid grid-cols-2 gap-6">
-          <Button className="min-h-[81px]!" onClick={() => void keep('outside')}>
-            No
-          </Button>
-          <Button className="min-h-[81px]!" onClick={() => void keep('within')}>
-            Yes
-          </Button>
+          <ActButton onClick={() => void keep('outside')}>No</ActButton>
+          <ActButton onClick={() => void keep('within')}>Yes</ActButton>
         </div>
       ) : (
-        <Button className="min-h-[81px]!" onClick={keepJudged}>
-          {outside ? 'Keep it: I take it again later' : 'Keep it'}
-        </Button>
+        <ActButton onClick={keepJudged}>{outside ? 'Keep it: I take it again later' : 'Keep it'}</ActButton>
       )}
       {check.judge.kind === 'yes' && check.ifNot && <p className="text-soft">If not: {check.ifNot}</p>}
       {(outside || check.judge.kind === 'yes') && (
@@ -106,13 +100,9 @@ export function CheckForm({ step, check, onDone }: CheckFormProps) {
               onChange={(event) => reason.setText(event.target.value)}
             />
           </Field>
-          <Button
-            className="min-h-[81px]!"
-            disabled={reason.text.trim() === ''}
-            onClick={() => void keep('accepted', reason.text.trim())}
-          >
+          <ActButton disabled={reason.text.trim() === ''} onClick={() => void keep('accepted', reason.text.trim())}>
             Accept it as it is
-          </Button>
+          </ActButton>
         </div>
       )}
     </div>

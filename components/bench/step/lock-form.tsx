@@ -1,7 +1,7 @@
 'use client';
 import { useState } from 'react';
 import type { Lock } from '@/lib/domain/build/locks';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { CheckRow } from '../entry/check-row';
 import { useDraft } from '../entry/use-draft';
@@ -81,12 +81,10 @@ export function LockForm({ draftKey, locks, onPass, onLeave }: LockFormProps) {
       </Field>
       {why.fault && <p className="font-semibold text-red">{why.fault}</p>}
       <div className="grid grid-cols-2 gap-6">
-        <Button className="min-h-[81px]!" onClick={onLeave}>
-          Leave it
-        </Button>
-        <Button kind={dangerous.length > 0 ? 'danger' : 'act'} className="min-h-[81px]!" onClick={pass}>
+        <ActButton onClick={onLeave}>Leave it</ActButton>
+        <ActButton kind={dangerous.length > 0 ? 'danger' : 'act'} onClick={pass}>
           Go past it
-        </Button>
+        </ActButton>
       </div>
     </section>
   );

@@ -1,6 +1,7 @@
 'use client';
 import type { PlanStep } from '@/lib/domain/plan/document';
 import { PartGlyph } from '@/components/diagrams/part-glyph';
+import { TrueFractions } from '../entry/true-fractions';
 import { SizeText } from '../entry/size-text';
 import { Working } from '../entry/working';
 import { BenchLink } from '../shell/bench-link';
@@ -35,7 +36,7 @@ export function PartLine({ step, use }: { step: PlanStep; use: PlanStep['uses'][
             {use.note && `, ${use.note}`}
           </p>
           {part.referenceFace && (
-            <p className="text-[1.0625rem] leading-snug text-soft">Mark from {part.referenceFace}</p>
+            <p className="text-[1.0625rem] leading-snug text-soft">Reference: {part.referenceFace}</p>
           )}
         </div>
       </div>
@@ -46,7 +47,7 @@ export function PartLine({ step, use }: { step: PlanStep; use: PlanStep['uses'][
             const measured = value?.from === 'measured';
             return (
               <li key={size.id} className="font-semibold text-blue">
-                {size.name}{' '}
+                <TrueFractions text={size.name} />{' '}
                 {measured && value ? (
                   <>
                     <SizeText sizes={[format(value.length)]} />, measured

@@ -60,7 +60,7 @@ export function StepAct({ step, status, timer, locks, methodId, onAskPast }: Ste
 
   if (readOnly) return <p className="py-3 text-soft">You look on at this build: its crew ticks the steps.</p>;
   if (plate.act === 'first-glue') return <FirstGluePlate step={step} />;
-  if (plate.act === 'clamps-on') return <ClampsOnPlate timer={plate.timer} />;
+  if (plate.act === 'clamps-on') return <ClampsOnPlate timer={plate.timer} name={step.glueUp?.name ?? step.title} />;
   if (plate.act === 'wait') return <WaitPlate locks={plate.locks} onlyTime={plate.onlyTime} onAskPast={onAskPast} />;
   const next = plate.act === 'go-on' ? now.here : null;
   // One and the same button through tick and going on, so that its debounce covers a second, ghostly touch.

@@ -5,6 +5,7 @@ import type { PlanStep } from '@/lib/domain/plan/document';
 import { stepNumber } from '@/lib/domain/plan/find';
 import { PlanText } from '../entry/plan-text';
 import { dayAndTime, minutesWords } from '../entry/time-words';
+import { TrueFractions } from '../entry/true-fractions';
 import { useClock } from '../entry/use-clock';
 import { AskedPhoto } from '../photos/asked-photo';
 import { PhotosWanted } from '../photos/photos-wanted';
@@ -38,10 +39,17 @@ export function StepBody({ step, status, timer, methodId, onMethod }: StepBodyPr
   return (
     <div className="step-columns">
       <AskedPhoto />
-      <ViewHeading focusKey={step.id} over={`${stage} · step ${stepNumber(plan, step.id)} of ${plan.steps.length}`}>
-        {step.title}
+      <ViewHeading
+        focusKey={step.id}
+        over={
+          <>
+            {stage} · step {stepNumber(plan, step.id)} of {plan.steps.length}
+            <Marked status={status} />
+          </>
+        }
+      >
+        <TrueFractions text={step.title} />
       </ViewHeading>
-      <Marked status={status} />
       <PlanText text={step.body} className="text-[1.375rem]" />
       {status.mark === 'open' && <WaitsFor locks={status.locks} stepId={step.id} />}
       {step.uses.length > 0 && (
@@ -84,11 +92,11 @@ function Marked({ status }: { status: StepStatus }) {
   if (!claim) return null;
   const who = build.crew.find(({ accountId }) => accountId === claim.accountId)?.name;
   return (
-    <p className={`font-figures text-[1.25rem] font-semibold ${status.mark === 'done' ? 'text-green' : 'text-soft'}`}>
-      {status.mark === 'done' ? 'Done' : 'Skipped'} {dayAndTime(claim.madeAt, clock)}
+    <span className={`font-semibold ${status.mark === 'done' ? 'text-green' : ''}`}>
+      {status.mark === 'done' ? ' · done' : ' · skipped'} {dayAndTime(claim.madeAt, clock)}
       {build.crew.length > 1 && who && ` by ${who}`}
       {claim.reason && `: ${claim.reason}`}
-    </p>
+    </span>
   );
 }
 

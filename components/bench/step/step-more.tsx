@@ -4,7 +4,7 @@ import type { StepStatus } from '@/lib/domain/build/locks';
 import { touchesOf } from '@/lib/domain/build/touches';
 import type { PlanStep } from '@/lib/domain/plan/document';
 import { findPart, stepNumber } from '@/lib/domain/plan/find';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { Field } from '@/components/ui/field';
 import { useDraft } from '../entry/use-draft';
 import { useActs } from '../shell/act-context';
@@ -24,16 +24,11 @@ export function StepMore({ step, status }: { step: PlanStep; status: StepStatus 
     <section aria-label="More with this step" className="grid gap-6 border-t-2 border-iron pt-4">
       <div className="grid grid-cols-2 gap-6">
         {status.mark === 'open' ? (
-          <Button
-            className="min-h-[81px]!"
-            aria-expanded={form === 'skip'}
-            onClick={() => setForm(form === 'skip' ? null : 'skip')}
-          >
+          <ActButton aria-expanded={form === 'skip'} onClick={() => setForm(form === 'skip' ? null : 'skip')}>
             Skip it
-          </Button>
+          </ActButton>
         ) : (
-          <Button
-            className="min-h-[81px]!"
+          <ActButton
             onClick={() =>
               status.mark === 'done'
                 ? open(`Step ${number} opened to be done again`, 'To be done again')
@@ -41,19 +36,16 @@ export function StepMore({ step, status }: { step: PlanStep; status: StepStatus 
             }
           >
             {status.mark === 'done' ? 'Do it again' : 'Open it again'}
-          </Button>
+          </ActButton>
         )}
-        <Button
-          className="min-h-[81px]!"
+        <ActButton
           aria-expanded={form === 'departure'}
           onClick={() => setForm(form === 'departure' ? null : 'departure')}
         >
           Change from the plan
-        </Button>
+        </ActButton>
         {status.mark === 'done' && (
-          <Button className="min-h-[81px]!" onClick={() => open(`Step ${number}: tick taken back`)}>
-            Take the tick back
-          </Button>
+          <ActButton onClick={() => open(`Step ${number}: tick taken back`)}>Take the tick back</ActButton>
         )}
       </div>
       {form === 'skip' && <SkipForm step={step} onDone={() => setForm(null)} />}
@@ -85,9 +77,7 @@ function SkipForm({ step, onDone }: { step: PlanStep; onDone: () => void }) {
       <Field label="Why is it skipped" error={asked && reason === '' ? 'Say in a few words why.' : undefined}>
         <textarea rows={2} maxLength={1000} value={why.text} onChange={(event) => why.setText(event.target.value)} />
       </Field>
-      <Button className="min-h-[81px]!" onClick={() => void skip()}>
-        Skip this step
-      </Button>
+      <ActButton onClick={() => void skip()}>Skip this step</ActButton>
     </div>
   );
 }
@@ -141,9 +131,7 @@ function DepartureForm({ step, onDone }: { step: PlanStep; onDone: () => void })
           {parts.length > 0 && `; parts ${parts.join(', ')}`}.
         </p>
       )}
-      <Button className="min-h-[81px]!" onClick={() => void keep()}>
-        Write it down
-      </Button>
+      <ActButton onClick={() => void keep()}>Write it down</ActButton>
     </div>
   );
 }

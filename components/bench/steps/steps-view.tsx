@@ -1,6 +1,7 @@
 'use client';
 import type { StepStatus } from '@/lib/domain/build/locks';
 import { progressOf } from '@/lib/domain/build/progress';
+import { TrueFractions } from '../entry/true-fractions';
 import { minutesWords } from '../entry/time-words';
 import { useClock } from '../entry/use-clock';
 import { BenchLink } from '../shell/bench-link';
@@ -42,10 +43,12 @@ export function StepsView() {
                   <li key={step.id} className="border-b border-line">
                     <BenchLink
                       to={{ buildId: build.id, view: 'step', stepId: step.id }}
-                      className="grid min-h-[81px] grid-cols-[2.6rem_1fr_auto] items-center gap-x-2 py-2 active:bg-line"
+                      className="grid min-h-[81px] grid-cols-[2.2rem_1fr_auto] items-center gap-x-3 py-2 active:bg-line"
                     >
                       <span className="figures text-[1.375rem] font-semibold">{index + 1}</span>
-                      <span className={`leading-snug ${now.here === step.id ? 'font-bold' : ''}`}>{step.title}</span>
+                      <span className={`leading-snug ${now.here === step.id ? 'font-bold' : ''}`}>
+                        <TrueFractions text={step.title} />
+                      </span>
                       <StepState status={now.statuses[step.id]} here={now.here === step.id} />
                     </BenchLink>
                   </li>

@@ -1,7 +1,7 @@
 'use client';
 import type { TimerView } from '@/lib/domain/glue/timer-view';
 import { calendarFile } from '@/lib/domain/glue/calendar-file';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 import { clockTime, dayAndTime } from '../entry/time-words';
 import { saveFile } from '../entry/save-file';
 import { useClock } from '../entry/use-clock';
@@ -25,9 +25,7 @@ export function AlarmOffer({ timer, name, at }: { timer: TimerView; name: string
       <p>
         Also set your phone’s alarm for <b className="figures">{dayAndTime(at, clock)}</b>.
       </p>
-      <Button className="min-h-[81px]!" onClick={save}>
-        Calendar file
-      </Button>
+      <ActButton onClick={save}>Calendar file</ActButton>
     </div>
   );
 }

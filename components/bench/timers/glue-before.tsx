@@ -3,6 +3,7 @@ import type { PlanStep } from '@/lib/domain/plan/document';
 import { windowsOf } from '@/lib/domain/build/locks';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
+import { TrueFractions } from '../entry/true-fractions';
 import { minutesWords } from '../entry/time-words';
 import { useBench } from '../shell/bench-context';
 import { useBuild } from '../shell/build-context';
@@ -80,7 +81,7 @@ export function GlueOrder({ order }: { order: readonly string[] }) {
       {order.map((line, index) => (
         <li key={line} className="grid min-h-[52px] grid-cols-[2rem_1fr] items-center border-b border-line py-1.5">
           <b className="figures font-semibold">{index + 1}</b>
-          {line}
+          <TrueFractions text={line} />
         </li>
       ))}
     </ol>

@@ -2,7 +2,7 @@
 import { useState } from 'react';
 import { askToNotify, notifyState } from '@/lib/device/notify';
 import { playTone, unlockSound } from '@/lib/device/alarm-sound';
-import { Button } from '@/components/ui/button';
+import { ActButton } from '../entry/act-button';
 
 /** What the timers can and cannot do here, in words that promise no more. */
 export function RingNotice() {
@@ -20,13 +20,9 @@ export function RingNotice() {
         otherwise it tells you when you come back. For a long wait set your phone’s own alarm too.
       </p>
       <div className="grid grid-cols-2 gap-6">
-        <Button className="min-h-[81px]!" onClick={() => void tryTone()}>
-          Hear the tone
-        </Button>
+        <ActButton onClick={() => void tryTone()}>Hear the tone</ActButton>
         {may === 'unasked' && (
-          <Button className="min-h-[81px]!" onClick={() => void askToNotify().then(setMay)}>
-            Allow notifications
-          </Button>
+          <ActButton onClick={() => void askToNotify().then(setMay)}>Allow notifications</ActButton>
         )}
       </div>
       {heard === 'played' && (

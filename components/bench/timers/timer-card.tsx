@@ -14,7 +14,9 @@ import { AlarmOffer } from './alarm-offer';
 import { GlueOrder } from './glue-before';
 import { GlueWorking } from './glue-working';
 import { temperatureText } from './temperature';
-import { TimerActs } from './timer-acts';
+import { TimerPlate } from './timer-plate';
+import { useTellTimer } from './use-tell-timer';
+import { ActButton } from '../entry/act-button';
 import { useScreenOn } from './timer-watch';
 import { PHASE_WORDS, timerWords } from './timer-words';
 
@@ -36,6 +38,7 @@ export function TimerCard({ timer, foremost }: TimerCardProps) {
   const windows = windowsOf(plan, timer.stepId, temperatureC);
   const { phase, earliest, latest } = timer;
   const open = phase === 'open';
+  const tell = useTellTimer(timer, name);
   const said = timerWords(timer, clock);
   const range = windows.known ? (open ? windows.open : phase === 'in-clamps' ? windows.clamp : windows.cure) : null;
   return (
@@ -78,7 +81,7 @@ export function TimerCard({ timer, foremost }: TimerCardProps) {
               {open ? 'first glue' : 'clamps on'} {clockTime(timer.phaseStartedAt)}
             </span>
             <span>
-              {range && `${minutesWords(range)}`}
+              {range && `${open ? `${SAYS[range.working.confidence]} ` : ''}${minutesWords(range)}`}
               {!open && `, ${dayAndTime(earliest, clock)} to ${dayAndTime(latest, clock)}`}
             </span>
           </p>
@@ -101,7 +104,15 @@ export function TimerCard({ timer, foremost }: TimerCardProps) {
         </Notice>
       )}
       {open && step?.glueUp && <GlueOrder order={step.glueUp.order} />}
-      {!readOnly && <TimerActs timer={timer} name={name} foremost={foremost} />}
+      {!readOnly && !foremost && <TimerPlate timer={timer} name={name} foremost={false} />}
+      {!readOnly && open && (
+        <div className="grid grid-cols-2 gap-6">
+          <ActButton onClick={() => tell('first-glue', 'Begun a minute earlier', { at: timer.startedAt - 60_000 })}>
+            It began 1 min earlier
+          </ActButton>
+          <ActButton onClick={() => tell('put-away', 'Timer put away')}>Not glued after all</ActButton>
+        </div>
+      )}
       {!open && latest !== null && latest > clock && <AlarmOffer timer={timer} name={name} at={latest} />}
       {step?.glueUp?.notBefore && !open && phase !== 'cured' && <Notice tone="wait">{step.glueUp.notBefore}</Notice>}
       {windows.known && <GlueWorking windows={windows} />}
@@ -116,6 +127,9 @@ export function TimerCard({ timer, foremost }: TimerCardProps) {
     </section>
   );
 }
+
+/** Whose figure it is. */
+const SAYS = { label: 'label says', read: 'usual for it', memory: 'usual for it' } as const;
 
 const PHASE_SENTENCE: Record<TimerView['phase'], string> = {
   open: 'Open time: close the joint before',
