@@ -31,9 +31,11 @@ export function judgeCheck(
       return { verdict: 'incomplete', words: `Measure ${judge.of[0]} and ${judge.of[1]}` };
     const off = Math.abs(first - second);
     const longer = first > second ? judge.of[0] : judge.of[1];
+    // Only a frame is racked square by its diagonals; two sides that differ are cut, not pushed.
+    const rack = judge.of.every((name) => /diagonal/i.test(name)) ? ': push its ends towards each other' : '';
     return off <= judge.tolerance
       ? { verdict: 'within', off, words: 'They agree within the tolerance' }
-      : { verdict: 'outside', off, words: `${longer} is longer: push its ends towards each other` };
+      : { verdict: 'outside', off, words: `${longer} is longer${rack}` };
   }
   const [reading] = readings;
   if (reading === undefined) return { verdict: 'incomplete', words: 'Measure it' };
