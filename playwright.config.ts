@@ -3,7 +3,7 @@ import { defineConfig } from '@playwright/test';
 export default defineConfig({
   testDir: 'tests/e2e',
   outputDir: 'test-results',
-  timeout: 180_000,
+  timeout: 120_000,
   expect: { timeout: 15_000 },
   // Each file starts and stops servers of its own; two cores carry two of them.
   workers: 2,
@@ -12,6 +12,8 @@ export default defineConfig({
   retries: 0,
   reporter: [['list'], ['json', { outputFile: process.env.E2E_REPORT ?? 'test-results/e2e.json' }]],
   use: {
+    actionTimeout: 15_000,
+    navigationTimeout: 30_000,
     viewport: { width: 390, height: 844 },
     hasTouch: true,
     locale: 'en-US',

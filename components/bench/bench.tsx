@@ -5,10 +5,11 @@ import { formatLength } from '@/lib/domain/measure';
 import { openAccountDatabase, type AccountDatabase } from '@/lib/store/database';
 import { defaultSettings, getCurrentAccount, getSettings, type KnownAccount } from '@/lib/store/device-database';
 import { SyncAgent } from '@/components/sync/sync-agent';
+import { installShell } from '@/components/sync/update-prompt';
 import { Announcer } from './shell/announcer';
 import { BenchProvider } from './shell/bench-context';
 import { BlankBench } from './shell/blank-bench';
-import { lengthStyle } from './shell/length-style';
+import { formatAsRead, lengthStyle } from './shell/length-style';
 import { SignedOutBench } from './shell/signed-out-bench';
 import { StorageFault } from './shell/storage-fault';
 import { useAccount } from './shell/use-account';
@@ -24,6 +25,7 @@ export function Bench() {
     () => true,
     () => false,
   );
+  useEffect(installShell, []);
   if (!mounted) return <BlankBench />;
   return (
     <StorageFault>
@@ -54,6 +56,7 @@ function OpenBench({ account }: { account: KnownAccount }) {
         db,
         settings,
         format: (length: number) => formatLength(length, lengthStyle(settings)),
+        formatRead: (length: number) => formatAsRead(length, settings),
       },
     [account, db, settings],
   );

@@ -8,7 +8,8 @@ let takeOver: (() => void) | null = null;
 const watchers = new Set<(takeOver: () => void) => void>();
 let registered = false;
 
-function register(): void {
+/** Puts the bench's own program on this phone. Called once the bench is on screen. */
+export function installShell(): void {
   if (registered) return;
   registered = true;
   registerServiceWorker((ready) => {
@@ -23,7 +24,7 @@ export function UpdatePrompt() {
   useEffect(() => {
     const watcher = (act: () => void) => setReady(() => act);
     watchers.add(watcher);
-    register();
+    installShell();
     return () => {
       watchers.delete(watcher);
     };

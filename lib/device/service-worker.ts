@@ -25,9 +25,15 @@ export async function registerServiceWorker(onWaiting: (takeOver: () => void) =>
   tell();
 }
 
-/** Resolves when this page's program is on the phone whole and works with no signal; false where that cannot be. */
+/** Longest wait for the program to be stored whole, ms: it is about 2 MB. */
+const SHELL_LIMIT_MS = 30_000;
+
+/** Whether this page's own program is on the phone whole, so that it opens with no signal; waits a while for it. */
 export async function shellIsReady(): Promise<boolean> {
-  if (!('serviceWorker' in navigator) || process.env.NODE_ENV !== 'production') return false;
-  const registration = await navigator.serviceWorker.ready;
-  return registration.active !== null;
+  // In development nothing is stored, on purpose.
+  if (process.env.NODE_ENV !== 'production') return true;
+  if (!('serviceWorker' in navigator)) return false;
+  const limit = new Promise<null>((resolve) => setTimeout(() => resolve(null), SHELL_LIMIT_MS));
+  const registration = await Promise.race([navigator.serviceWorker.ready, limit]);
+  return registration?.active !== null && registration !== null;
 }

@@ -2,6 +2,7 @@
 import { useState } from 'react';
 import { askToPersist } from '@/lib/device/storage-health';
 import type { PackProgress, PackResult } from '@/lib/device/pack';
+import { shellIsReady } from '@/lib/device/service-worker';
 import type { BuildRow } from '@/lib/store/rows';
 import { ActButton } from '../entry/act-button';
 import { Notice } from '@/components/ui/notice';
@@ -10,6 +11,9 @@ import { goTo } from '../shell/address';
 import { useBench } from '../shell/bench-context';
 import type { ServerBuild } from './ask-for-builds';
 import { byteWords, packWords } from './pack-words';
+
+const NO_SHELL =
+  'The pack is here, and the bench’s own program is not yet: this browser has not stored it. Keep this page open with a signal for a minute, then try again.';
 
 /** One build: taken with visible progress, verified, then said to be ready with its size. */
 export function TakeRow({ build, here }: { build: ServerBuild; here: BuildRow | undefined }) {
@@ -32,13 +36,15 @@ export function TakeRow({ build, here }: { build: ServerBuild; here: BuildRow | 
   async function download(): Promise<PackResult> {
     try {
       const { takeToBench } = await import('@/lib/device/pack');
-      return await takeToBench({
+      const taken = await takeToBench({
         db,
         buildId: build.id,
         fetch: (input) => fetch(input, { cache: 'no-store' }),
         caches: window.caches,
         onProgress: setProgress,
       });
+      if (!taken.ok || (await shellIsReady())) return taken;
+      return { ok: false, code: 'broken', message: NO_SHELL };
     } catch (error) {
       console.error(error);
       const why = error instanceof Error ? error.message : String(error);
