@@ -29,9 +29,19 @@ module.exports = {
     only('device-uses-store', '^lib/device/', '^lib/(device|store|domain)/', 'device → store, domain'),
     only('server-uses-models', '^lib/server/', '^(lib/(server|domain)/|models/)', 'server → models, domain'),
     only('models-stand-alone', '^models/', '^(models/|lib/domain/)', 'models → domain'),
-    only('components-never-server', '^components/', '^(components/|lib/(store|sync|device|domain)/)', 'components → store, sync, device, domain'),
+    only(
+      'components-never-server',
+      '^components/',
+      '^(components/|lib/(store|sync|device|domain)/)',
+      'components → store, sync, device, domain',
+    ),
     only('api-uses-server', '^app/api/', '^(app/api/|lib/(server|domain)/)', 'app/api → server, domain'),
-    only('bench-page-is-client-only', '^app/bench/', '^(app/bench/|components/|lib/(store|sync|device|domain)/)', 'the bench never reaches the server'),
+    only(
+      'bench-page-is-client-only',
+      '^app/bench/',
+      '^(app/bench/|components/|lib/(store|sync|device|domain)/)',
+      'the bench never reaches the server',
+    ),
     only('worker-stands-alone', '^worker/', '^(worker/|lib/domain/)', 'worker → domain'),
     {
       name: 'models-only-behind-server',
@@ -46,6 +56,9 @@ module.exports = {
     exclude: { path: '(^|/)(\\.next|\\.data|coverage)/' },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: 'tsconfig.json' },
-    enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'require', 'node', 'default', 'types'] },
+    enhancedResolveOptions: {
+      exportsFields: ['exports'],
+      conditionNames: ['import', 'require', 'node', 'default', 'types'],
+    },
   },
 };

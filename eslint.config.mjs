@@ -1,7 +1,7 @@
 import nextVitals from 'eslint-config-next/core-web-vitals';
 import nextTypescript from 'eslint-config-next/typescript';
 
-export default [
+const config = [
   ...nextVitals,
   ...nextTypescript,
   {
@@ -31,3 +31,5 @@ export default [
     rules: { 'react-hooks/rules-of-hooks': 'off' },
   },
 ];
+
+export default config;

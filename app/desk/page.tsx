@@ -9,7 +9,7 @@ export const metadata: Metadata = { title: 'Builds' };
 
 export default async function BuildsPage() {
   const { account } = await requireSession('/desk');
-  const builds = await listBuilds(account.id, Date.now());
+  const builds = await listBuilds(account.id);
   return (
     <div className="grid gap-6">
       <div className="flex flex-wrap items-center justify-between gap-4">

@@ -12,7 +12,6 @@ export default function OfflinePage() {
       <h1 className="text-4xl">No signal here</h1>
       <p className="text-xl">The desk needs a signal. The bench does not: what you took there is on this phone.</p>
       {/* A plain link: the framework's own would ask the network for a payload first. */}
-      {/* eslint-disable-next-line @next/next/no-html-link-for-pages */}
       <a href="/bench" className={linkLook.plate}>
         Open the bench
       </a>

@@ -1,6 +1,7 @@
 'use client';
 import { useQueryClient } from '@tanstack/react-query';
 import { useId, useState } from 'react';
+import { useHydrated } from '@/components/account/use-hydrated';
 import { Notice } from '@/components/ui/notice';
 import { controlLook } from '@/components/ui/field';
 import type { PlanProblem } from '@/lib/domain/plan/plan-problem';
@@ -13,6 +14,8 @@ type State =
 export function ImportPlan() {
   const id = useId();
   const queries = useQueryClient();
+  // A file chosen before scripts run would be lost without a word.
+  const hydrated = useHydrated();
   const [state, setState] = useState<State>({ is: 'waiting' });
 
   async function bring(file: File | undefined) {
@@ -36,7 +39,7 @@ export function ImportPlan() {
         type="file"
         accept="application/json,.json"
         className={controlLook}
-        disabled={state.is === 'sending'}
+        disabled={!hydrated || state.is === 'sending'}
         onChange={(event) => {
           const { files } = event.currentTarget;
           void bring(files?.[0]).finally(() => {

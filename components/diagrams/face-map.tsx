@@ -15,31 +15,35 @@ interface FaceMapProps {
   format: (length: Length) => string;
 }
 
+const DRAWN_WIDTH = 1_000;
+
 /**
  * One face with its fasteners (crosses; temporary ones ringed, taken out ones left off) and the cuts still to come, each
  * with its margin hatched red: no metal may stay there. Dimensions stand outside.
  */
 export function FaceMap({ face, length, width, stepId, done, format }: FaceMapProps) {
   const hatch = useId();
-  const scale = Math.max(length, width);
-  const pad = scale * 0.09;
-  const cross = scale * 0.016;
+  // Drawn a thousand wide: browsers cut font sizes off at ten thousand, and a face has hundreds of thousands of units.
+  const k = DRAWN_WIDTH / Math.max(length, width);
+  const [across, up] = [length * k, width * k];
+  const pad = 90;
+  const cross = 16;
   const fasteners = face.fasteners.filter(({ removedIn }) => !removedIn || !done.has(removedIn));
-  const y = (fromLowerEdge: number) => width - fromLowerEdge;
+  const y = (fromLowerEdge: number) => up - fromLowerEdge * k;
   return (
     <svg
       role="img"
       aria-label={describe(face, fasteners, stepId, done)}
-      viewBox={`${-pad} ${-pad * 0.3} ${length + pad * 1.3} ${width + pad * 1.3}`}
+      viewBox={`${-pad} ${-pad * 0.3} ${across + pad * 1.3} ${up + pad * 1.3}`}
       className="max-h-80 w-full"
       fill="none"
     >
       <defs>
-        <Hatch id={hatch} colour="var(--red)" pitch={scale / 48} />
+        <Hatch id={hatch} colour="var(--red)" pitch={DRAWN_WIDTH / 48} />
       </defs>
       <rect
-        width={length}
-        height={width}
+        width={across}
+        height={up}
         fill="var(--paper)"
         stroke="var(--iron)"
         strokeWidth={2}
@@ -52,10 +56,10 @@ export function FaceMap({ face, length, width, stepId, done, format }: FaceMapPr
           <g key={cut.id}>
             {!made && (
               <rect
-                x={cut.x - m}
+                x={(cut.x - m) * k}
                 y={y(cut.y + cut.width + m)}
-                width={cut.length + 2 * m}
-                height={cut.width + 2 * m}
+                width={(cut.length + 2 * m) * k}
+                height={(cut.width + 2 * m) * k}
                 fill={`url(#${CSS_SAFE(hatch)})`}
                 stroke="var(--red)"
                 strokeWidth={1.5}
@@ -64,10 +68,10 @@ export function FaceMap({ face, length, width, stepId, done, format }: FaceMapPr
               />
             )}
             <rect
-              x={cut.x}
+              x={cut.x * k}
               y={y(cut.y + cut.width)}
-              width={cut.length}
-              height={cut.width}
+              width={cut.length * k}
+              height={cut.width * k}
               stroke={cut.step === stepId ? 'var(--blue)' : made ? 'var(--iron)' : 'var(--red)'}
               strokeWidth={2}
               vectorEffect="non-scaling-stroke"
@@ -78,7 +82,7 @@ export function FaceMap({ face, length, width, stepId, done, format }: FaceMapPr
       {fasteners.map((fastener) => {
         const colour = fastener.step === stepId || fastener.removedIn === stepId ? 'var(--blue)' : 'var(--iron)';
         return (
-          <g key={fastener.id} transform={`translate(${fastener.x} ${y(fastener.y)})`} stroke={colour}>
+          <g key={fastener.id} transform={`translate(${fastener.x * k} ${y(fastener.y)})`} stroke={colour}>
             <path
               d={`M${-cross} ${-cross}L${cross} ${cross}M${-cross} ${cross}L${cross} ${-cross}`}
               strokeWidth={2.5}
@@ -89,11 +93,11 @@ export function FaceMap({ face, length, width, stepId, done, format }: FaceMapPr
           </g>
         );
       })}
-      <g className="figures" fill="var(--soft)" fontSize={scale * 0.045} fontWeight={500}>
-        <text x={length / 2} y={width + pad * 0.75} textAnchor="middle">
+      <g className="figures" fill="var(--soft)" fontSize={54} fontWeight={500}>
+        <text x={across / 2} y={up + pad * 0.75} textAnchor="middle">
           {format(length)}
         </text>
-        <text transform={`translate(${-pad * 0.35} ${width / 2}) rotate(-90)`} textAnchor="middle">
+        <text transform={`translate(${-pad * 0.3} ${up / 2}) rotate(-90)`} textAnchor="middle">
           {format(width)}
         </text>
       </g>

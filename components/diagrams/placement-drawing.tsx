@@ -1,4 +1,4 @@
-import { projectBox, type Elevation, type Placement } from './project-box';
+import { projectBox, type Elevation, type Placement, type Point } from './project-box';
 
 interface PlacementDrawingProps {
   placements: readonly Placement[];
@@ -48,7 +48,7 @@ export function PlacementDrawing({ placements, highlighted, standing, elevation,
         );
       })}
       {boxes
-        .filter(({ placement }) => highlighted.has(placement.part))
+        .filter((box, order) => highlighted.has(box.placement.part) && isHidden(box, boxes.slice(order + 1)))
         .map(({ placement, outline }) => (
           <polygon
             key={`${placement.part}#${placement.piece}`}
@@ -62,4 +62,27 @@ export function PlacementDrawing({ placements, highlighted, standing, elevation,
         ))}
     </svg>
   );
+}
+
+interface Drawn {
+  outline: readonly Point[];
+}
+
+/** Whether boxes nearer to the eye cover half or more of a box, judged by their frames: near enough for a dashed line. */
+function isHidden(box: Drawn, nearer: readonly Drawn[]): boolean {
+  const frame = frameOf(box);
+  const area = (frame.right - frame.left) * (frame.top - frame.bottom);
+  const covered = nearer.reduce((sum, other) => {
+    const { left, right, bottom, top } = frameOf(other);
+    const across = Math.min(right, frame.right) - Math.max(left, frame.left);
+    const up = Math.min(top, frame.top) - Math.max(bottom, frame.bottom);
+    return sum + (across > 0 && up > 0 ? across * up : 0);
+  }, 0);
+  return covered >= area / 2;
+}
+
+function frameOf({ outline }: Drawn) {
+  const xs = outline.map(({ x }) => x);
+  const ys = outline.map(({ y }) => y);
+  return { left: Math.min(...xs), right: Math.max(...xs), bottom: Math.min(...ys), top: Math.max(...ys) };
 }

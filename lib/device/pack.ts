@@ -2,7 +2,6 @@ import { packManifestSchema, type PackFile, type PackManifest } from '../domain/
 import { readPlan } from '../domain/plan/read-plan';
 import type { AccountDatabase } from '../store/database';
 import { savePack } from '../store/mutations/save-pack';
-import type { BuildRow } from '../store/rows';
 import { sha256Hex } from './sha256';
 
 export interface PackProgress {
@@ -65,30 +64,6 @@ export async function takeToBench({ db, buildId, fetch, caches, onProgress }: Pa
   const notSaved = await savePack(db, data, read.plan);
   if (notSaved) return { ok: false, code: 'full', message: notSaved.message };
   return { ok: true, manifest: data };
-}
-
-/** Whether each file of a build's pack is on this phone and is what it should be. */
-export async function verifyPack(
-  db: AccountDatabase,
-  build: BuildRow,
-  caches: Pick<CacheStorage, 'open'>,
-): Promise<boolean> {
-  const cache = await caches.open(packCacheName(db.accountId));
-  for (const file of build.packFiles) {
-    const kept = await cache.match(file.url);
-    if (!kept || (await sha256Hex(await kept.arrayBuffer())) !== file.sha256) return false;
-  }
-  return (await db.plans.get(build.contentHash)) !== undefined;
-}
-
-/** Address in memory of a pack's file, for an image or a link; null where it is not on this phone. */
-export async function packFileBlob(
-  accountId: string,
-  url: string,
-  caches: Pick<CacheStorage, 'open'>,
-): Promise<Blob | null> {
-  const kept = await (await caches.open(packCacheName(accountId))).match(url);
-  return kept ? kept.blob() : null;
 }
 
 const foreign = {

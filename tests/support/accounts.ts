@@ -24,7 +24,13 @@ export async function makeAccount({
   password = PASSWORD,
   role = 'member',
   confirmed = true,
-}: AccountFacts = {}): Promise<{ id: string; email: string; name: string; password: string }> {
+}: AccountFacts = {}): Promise<{
+  id: string;
+  email: string;
+  name: string;
+  password: string;
+  role: 'member' | 'author' | 'operator';
+}> {
   const row = await db().models.Account.create({
     email,
     name,
@@ -32,7 +38,7 @@ export async function makeAccount({
     passwordHash: await hashPassword(password),
     emailConfirmedAt: confirmed ? new Date() : null,
   });
-  return { id: row.id, email, name, password };
+  return { id: row.id, email, name, password, role };
 }
 
 /** A sign-in of this account: its row, and the Cookie header that goes with it. */

@@ -4,7 +4,7 @@ import { listBuilds } from '@/lib/server/queries/builds';
 import { route } from '@/lib/server/route';
 
 export const GET = route({ auth: 'member' }, async ({ account }) => ({
-  builds: await listBuilds(account.id, Date.now()),
+  builds: await listBuilds(account.id),
 }));
 
 export const POST = route({ auth: 'member', body: startBuildSchema }, ({ account, body }) =>

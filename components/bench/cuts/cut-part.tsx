@@ -4,9 +4,11 @@ import { pieceMark } from '@/lib/domain/build/views';
 import { findPart } from '@/lib/domain/plan/find';
 import type { ResolvedPart } from '@/lib/domain/plan/resolve-parts';
 import { ActButton } from '../entry/act-button';
+import { TrueFractions } from '../entry/true-fractions';
 import { SizeText } from '../entry/size-text';
 import { useActs } from '../shell/act-context';
 import { useBench } from '../shell/bench-context';
+import { precisionWords } from '../shell/length-style';
 import { useBuild } from '../shell/build-context';
 import { Tick } from '../step/step-act';
 import { takenSizes } from '../step/taken-sizes';
@@ -16,11 +18,12 @@ const HAND = { left: 'left', right: 'right' } as const;
 
 /** A part of the cut list: size, grain, reference face, and a tick for each of its pieces. */
 export function CutPart({ resolved, tickable }: { resolved: ResolvedPart; tickable: boolean }) {
-  const { format } = useBench();
-  const { build, plan, state, readOnly } = useBuild();
+  const { format, settings } = useBench();
+  const { build, plan, state, values, readOnly } = useBuild();
   const { act } = useActs();
   const { part, length, width, thickness, uses, estimate } = resolved;
-  const waits = estimate ? takenSizes(plan, uses).map(({ name }) => name) : [];
+  const waits = estimate ? takenSizes(plan, uses).filter(({ id }) => values[id]?.from !== 'measured') : [];
+  const sizes = [length, width, thickness].map(format);
   const { rough } = part;
   const roughSizes = rough && [
     length + (rough.length ?? 0),
@@ -33,13 +36,11 @@ export function CutPart({ resolved, tickable }: { resolved: ResolvedPart; tickab
       <div className="grid grid-cols-[3.4rem_1fr] items-baseline gap-x-2">
         <b className="font-figures text-[1.75rem] font-semibold">{part.label}</b>
         <div>
-          <SizeText
-            sizes={[length, width, thickness].map(format)}
-            className="text-[1.625rem] leading-tight font-semibold"
-          />
+          <SizeText sizes={sizes} className="text-[1.625rem] leading-tight font-semibold" />
           <p className="text-[1.0625rem] text-soft">
             {part.name}
             {part.grain === 'across' && ', grain across'}
+            {sizes.some(({ rounded }) => rounded) && `; to the nearest ${precisionWords(settings)}`}
             {part.madeFrom && `, from ${part.madeFrom.flatMap((id) => findPart(plan, id)?.label ?? []).join(', ')}`}
           </p>
           {roughSizes && (
@@ -50,7 +51,9 @@ export function CutPart({ resolved, tickable }: { resolved: ResolvedPart; tickab
           {part.referenceFace && <p className="text-[1.0625rem] text-soft">Reference: {part.referenceFace}</p>}
           {part.selection && <p className="text-[1.0625rem] text-soft">{part.selection}</p>}
           {waits.length > 0 && (
-            <p className="text-[1.0625rem] font-semibold text-blue">Not measured yet: {waits.join(', ')}</p>
+            <p className="text-[1.0625rem] font-semibold text-blue">
+              Not measured yet: <TrueFractions text={waits.map(({ name }) => name).join(', ')} />
+            </p>
           )}
         </div>
       </div>

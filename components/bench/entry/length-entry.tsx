@@ -111,9 +111,9 @@ function LengthInput({ field, active, keyboard, showProblems, onFocus, onText }:
 }
 
 function Echo({ read }: { read: ParsedLength }) {
-  const { format, settings } = useBench();
+  const { formatRead, settings } = useBench();
   if (!read.ok) return null;
-  const shown = format(read.length);
+  const shown = formatRead(read.length);
   return (
     <span className="text-soft">
       reads {shown.rounded ? 'as about ' : 'as '}

@@ -32,7 +32,7 @@ function Figure({ size }: { size: FormattedLength }) {
     <>
       {minus}
       {parts.feet !== undefined && `${parts.feet}′ `}
-      {(parts.whole !== 0 || parts.feet !== undefined) && `${parts.whole}\u202f`}
+      {(parts.whole !== 0 || parts.feet !== undefined) && <span className="pr-[0.14em]">{parts.whole}</span>}
       <span className="fraction">
         {parts.numerator}/{parts.denominator}
       </span>

@@ -15,7 +15,7 @@ import { ViewHeading } from '../shell/view-heading';
 
 /** The whole log, newest day first, by session; anything can be undone from here, and an undo taken back. */
 export function LogView() {
-  const { db, format } = useBench();
+  const { db, formatRead: format } = useBench();
   const { build, plan, state } = useBuild();
   const entries = useLiveQuery(() => getEntries(db, build.id), [db, build.id]);
   const days = useMemo(

@@ -56,4 +56,4 @@ export function MoreView() {
 }
 
 const count = (many: number, one: string, more: string) =>
-  many === 0 ? `no ${more}` : `${many} ${many === 1 ? one : more}`;
+  many === 0 ? `No ${more} yet` : `${many} ${many === 1 ? one : more}`;

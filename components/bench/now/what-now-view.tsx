@@ -27,7 +27,10 @@ export function WhatNowView() {
           <div className="bench-page">
             <AskedPhoto />
             {now.timers.length > 0 && (
-              <ul className="grid grid-cols-1 gap-3 min-[420px]:grid-cols-2" aria-label="Curing and in clamps">
+              <ul
+                className="grid grid-cols-[repeat(auto-fit,minmax(10rem,1fr))] gap-3"
+                aria-label="Curing and in clamps"
+              >
                 {now.timers.map((timer) => (
                   <li key={timer.timerId}>
                     <TimerBox timer={timer} />

@@ -44,7 +44,7 @@ export function useActs(): ActContextValue {
 }
 
 export function ActProvider({ children }: { children: ReactNode }) {
-  const { db, format } = useBench();
+  const { db, formatRead: format } = useBench();
   const { build, plan, state } = useBuild();
   const announce = useAnnounce();
   const [lastHere, setLastHere] = useState<LastAct | null>(null);

@@ -10,6 +10,8 @@ export interface BenchContextValue {
   settings: DeviceSettings;
   /** A length in the person's system and precision. */
   format: (length: Length) => FormattedLength;
+  /** A length that was read off the work, finer than the person's precision where it was read finer. */
+  formatRead: (length: Length) => FormattedLength;
 }
 
 const BenchContext = createContext<BenchContextValue | null>(null);

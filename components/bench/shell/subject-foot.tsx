@@ -18,7 +18,7 @@ export function SubjectFoot({ stepId }: { stepId: string }) {
   return (
     <nav className="bench-foot" aria-label="This step">
       <BenchLink to={{ buildId: build.id, view: 'step', stepId }} className={look}>
-        Back to step {stepNumber(plan, stepId)}
+        Step {stepNumber(plan, stepId)}
       </BenchLink>
       {WAYS.map(({ view, word }) => (
         <BenchLink

@@ -19,7 +19,7 @@ import { useBuild } from '../shell/build-context';
 
 /** A size that comes from the piece, not the plan: how and where to measure it, and what follows from it. */
 export function KeySizeItem({ size, startOpen }: { size: PlanKeySize; startOpen: boolean }) {
-  const { format, settings } = useBench();
+  const { formatRead: format, settings } = useBench();
   const { build, plan, state, values, readOnly } = useBuild();
   const { act } = useActs();
   const draft = useDraft(`size/${build.id}/${size.id}`);

@@ -18,7 +18,7 @@ type Measurement = ReturnType<typeof measurementsOf>[number];
 
 /** A measurement; changing it keeps the old one in the log. */
 export function MeasurementItem({ measurement }: { measurement: Measurement }) {
-  const { format } = useBench();
+  const { formatRead: format } = useBench();
   const { plan, readOnly } = useBuild();
   const clock = useClock(60_000);
   const [editing, setEditing] = useState(false);
@@ -47,7 +47,7 @@ export function MeasurementItem({ measurement }: { measurement: Measurement }) {
 }
 
 function ChangeForm({ measurement, onDone }: { measurement: Measurement; onDone: () => void }) {
-  const { format, settings } = useBench();
+  const { formatRead: format, settings } = useBench();
   const { build } = useBuild();
   const { act } = useActs();
   const [what, setWhat] = useState(measurement.value.what);

@@ -25,7 +25,7 @@ type Verdict = EntryValue<'check-recorded'>['verdict'];
 
 /** Takes a check: readings with the pad, judged as they are put in; out of tolerance is redone, or accepted with a reason. */
 export function CheckForm({ step, check, onDone }: CheckFormProps) {
-  const { settings, format } = useBench();
+  const { settings, formatRead: format } = useBench();
   const { build, plan, values } = useBuild();
   const { act } = useActs();
   const labels = readingLabels(check);

@@ -9,14 +9,14 @@ import { verdictWords } from './check-words';
 
 /** Checks of the step in boxes; a touch opens the one to take. */
 export function Checks({ step }: { step: PlanStep }) {
-  const { format } = useBench();
+  const { formatRead: format } = useBench();
   const { state, readOnly } = useBuild();
   const [open, setOpen] = useState<string | null>(null);
   if (step.checks.length === 0) return null;
   const taking = step.checks.find(({ id }) => id === open);
   return (
     <section aria-label="Checks" className="grid gap-3">
-      <div className="grid grid-cols-1 gap-6 min-[380px]:grid-cols-2">
+      <div className="grid grid-cols-[repeat(auto-fit,minmax(9rem,1fr))] gap-6">
         {step.checks.map((check) => {
           const value = checkOf(state, step.id, check.id)?.value;
           const colour = value?.verdict === 'within' ? 'text-green' : value?.verdict === 'outside' ? 'text-red' : '';

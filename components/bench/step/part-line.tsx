@@ -6,6 +6,7 @@ import { SizeText } from '../entry/size-text';
 import { Working } from '../entry/working';
 import { BenchLink } from '../shell/bench-link';
 import { useBench } from '../shell/bench-context';
+import { precisionWords } from '../shell/length-style';
 import { useBuild } from '../shell/build-context';
 import { takenSizes } from './taken-sizes';
 
@@ -13,7 +14,7 @@ const HANDS = { left: 'left-handed', right: 'right-handed', pair: 'half left-, h
 
 /** A part that the step works on: drawing, label, finished size, how many; sizes taken from the work in blue. */
 export function PartLine({ step, use }: { step: PlanStep; use: PlanStep['uses'][number] }) {
-  const { format } = useBench();
+  const { format, formatRead, settings } = useBench();
   const { build, plan, parts, values } = useBuild();
   const resolved = parts.get(use.part);
   if (!resolved) return null;
@@ -34,6 +35,7 @@ export function PartLine({ step, use }: { step: PlanStep; use: PlanStep['uses'][
             {pieces} × {part.name}
             {part.hand && `, ${HANDS[part.hand]}`}
             {use.note && `, ${use.note}`}
+            {sizes.some(({ rounded }) => rounded) && `; sizes to the nearest ${precisionWords(settings)}`}
           </p>
           {part.referenceFace && (
             <p className="text-[1.0625rem] leading-snug text-soft">Reference: {part.referenceFace}</p>
@@ -50,7 +52,7 @@ export function PartLine({ step, use }: { step: PlanStep; use: PlanStep['uses'][
                 <TrueFractions text={size.name} />{' '}
                 {measured && value ? (
                   <>
-                    <SizeText sizes={[format(value.length)]} />, measured
+                    <SizeText sizes={[formatRead(value.length)]} />, measured
                   </>
                 ) : (
                   'not measured yet'
@@ -80,7 +82,7 @@ export function PartLine({ step, use }: { step: PlanStep; use: PlanStep['uses'][
             ...uses.map((id) => ({
               name: plan.keySizes.find((size) => size.id === id)?.name ?? id,
               says: values[id]
-                ? `${format(values[id].length).text}: ${values[id].working.replace(/^=\s*/, '')}`
+                ? `${formatRead(values[id].length).text}: ${values[id].working.replace(/^=\s*/, '')}`
                 : 'unknown',
             })),
           ]}

@@ -6,6 +6,7 @@ import { stepNumber } from '@/lib/domain/plan/find';
 import { PlanText } from '../entry/plan-text';
 import { dayAndTime, minutesWords } from '../entry/time-words';
 import { TrueFractions } from '../entry/true-fractions';
+import { useWide } from '../entry/use-wide';
 import { useClock } from '../entry/use-clock';
 import { AskedPhoto } from '../photos/asked-photo';
 import { PhotosWanted } from '../photos/photos-wanted';
@@ -21,19 +22,22 @@ import { PartLine } from './part-line';
 import { StepDrawings } from './step-drawings';
 import { StepMore } from './step-more';
 import { StepWritten } from './step-written';
+import type { usePassedLocks } from './use-passed-locks';
 import { WaitsFor } from './waits-for';
 
 interface StepBodyProps {
   step: PlanStep;
   status: StepStatus;
   timer: TimerView | undefined;
+  locks: ReturnType<typeof usePassedLocks>;
   methodId: string;
   onMethod: (methodId: string) => void;
 }
 
 /** All there is to know about a step, the next thing to look at first. */
-export function StepBody({ step, status, timer, methodId, onMethod }: StepBodyProps) {
+export function StepBody({ step, status, timer, locks, methodId, onMethod }: StepBodyProps) {
   const { plan, now, readOnly } = useBuild();
+  const wide = useWide();
   const stage = plan.stages.find(({ id }) => id === step.stage)?.name;
   const others = now.timers.filter(({ timerId }) => timerId !== timer?.timerId).slice(0, 2);
   return (
@@ -51,7 +55,9 @@ export function StepBody({ step, status, timer, methodId, onMethod }: StepBodyPr
         <TrueFractions text={step.title} />
       </ViewHeading>
       <PlanText text={step.body} className="text-[1.375rem]" />
-      {status.mark === 'open' && <WaitsFor locks={status.locks} stepId={step.id} />}
+      {status.mark === 'open' && (
+        <WaitsFor locks={status.locks} stepId={step.id} passed={locks.passed} why={locks.why} />
+      )}
       {step.uses.length > 0 && (
         <ul className="grid gap-2" aria-label="Parts">
           {step.uses.map((use) => (
@@ -61,7 +67,7 @@ export function StepBody({ step, status, timer, methodId, onMethod }: StepBodyPr
       )}
       <Cautions cautions={step.cautions} />
       {(timer || others.length > 0) && (
-        <div className="grid grid-cols-1 gap-3 min-[380px]:grid-cols-2">
+        <div className="grid grid-cols-[repeat(auto-fit,minmax(9rem,1fr))] gap-3">
           {[...(timer ? [timer] : []), ...others].map((each) => (
             <TimerBox key={each.timerId} timer={each} />
           ))}
@@ -71,7 +77,7 @@ export function StepBody({ step, status, timer, methodId, onMethod }: StepBodyPr
       <Methods methods={step.methods} chosen={methodId} onChoose={onMethod} />
       {step.glueUp && (timer ? <GlueOrder order={step.glueUp.order} /> : <GlueBefore step={step} />)}
       {step.finish && <Coat step={step} />}
-      <StepDrawings step={step} />
+      {!wide && <StepDrawings step={step} />}
       <Needs step={step} />
       {step.photosWanted.length > 0 && <PhotosWanted step={step} />}
       {step.stoppingPlace && (

@@ -98,7 +98,8 @@ function FaceFigure({ face, stepId, done }: { face: PlanFace; stepId: string; do
         format={(value) => format(value).text}
       />
       <figcaption className="text-[1.0625rem] text-soft">
-        <b className="text-iron">{face.name}.</b> {face.orientation}. Crosses are fasteners
+        <b className="text-iron first-letter:uppercase inline-block">{face.name}.</b> {face.orientation}. Crosses are
+        fasteners
         {temporary && ', ringed ones come out again'}
         {clear && '; no metal in the red hatching, a later cut goes there'}.
       </figcaption>

@@ -2,6 +2,7 @@
 import { useMemo, useState } from 'react';
 import type { TimerView } from '@/lib/domain/glue/timer-view';
 import { findStep } from '@/lib/domain/plan/find';
+import { useWide } from '../entry/use-wide';
 import { useDraft } from '../entry/use-draft';
 import { goTo } from '../shell/address';
 import { useBuild } from '../shell/build-context';
@@ -13,6 +14,7 @@ import { Rule } from './rule';
 import { ruleMarks } from './rule-marks';
 import { StepAct } from './step-act';
 import { StepBody } from './step-body';
+import { StepDrawings } from './step-drawings';
 import { StepFoot } from './step-foot';
 import { StepReminder } from './step-reminder';
 import { usePassedLocks } from './use-passed-locks';
@@ -22,6 +24,7 @@ export function StepView({ stepId }: { stepId: string }) {
   const { build, plan, now } = useBuild();
   const marks = useMemo(() => ruleMarks(plan, now.statuses), [plan, now.statuses]);
   const [askingPast, setAskingPast] = useState<string | null>(null);
+  const wide = useWide();
   const locks = usePassedLocks(build.id, stepId);
   const method = useDraft(`method/${build.id}/${stepId}`);
   const step = findStep(plan, stepId);
@@ -49,7 +52,7 @@ export function StepView({ stepId }: { stepId: string }) {
             )
           }
         />
-        <div className="step-body" key={stepId}>
+        <div className="step-body" key={`${stepId} ${asking}`}>
           {asking ? (
             <div className="step-columns">
               <ViewHeading focusKey={`past ${stepId}`} over={step.title}>
@@ -66,12 +69,24 @@ export function StepView({ stepId }: { stepId: string }) {
               />
             </div>
           ) : (
-            <StepBody step={step} status={status} timer={timer} methodId={methodId ?? ''} onMethod={method.setText} />
+            <StepBody
+              step={step}
+              status={status}
+              timer={timer}
+              locks={locks}
+              methodId={methodId ?? ''}
+              onMethod={method.setText}
+            />
           )}
         </div>
         <div className="step-act">
           {!asking && (
             <>
+              {wide && (
+                <div className="step-aside">
+                  <StepDrawings step={step} />
+                </div>
+              )}
               <StepReminder step={step} status={status} />
               <StepAct
                 step={step}

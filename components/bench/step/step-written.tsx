@@ -9,7 +9,7 @@ import { useBuild } from '../shell/build-context';
 
 /** What was kept with this step: photos, notes, measurements. */
 export function StepWritten({ stepId }: { stepId: string }) {
-  const { format } = useBench();
+  const { formatRead: format } = useBench();
   const { build, state } = useBuild();
   const here = <V extends { stepId: string | null }>(items: { value: V; id: string; madeAt: number }[]) =>
     items.filter(({ value }) => value.stepId === stepId);

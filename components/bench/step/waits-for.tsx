@@ -7,11 +7,26 @@ import { dayAndTime } from '../entry/time-words';
 import { useClock } from '../entry/use-clock';
 import { lockKey } from './plate-of';
 
-/** What the step waits for, each with the way there. */
-export function WaitsFor({ locks, stepId }: { locks: readonly Lock[]; stepId: string }) {
+interface WaitsForProps {
+  locks: readonly Lock[];
+  stepId: string;
+  /** Keys of the locks gone past, and why. */
+  passed: ReadonlySet<string>;
+  why: string;
+}
+
+/** What the step waits for, each with the way there; what was gone past, with its reason. */
+export function WaitsFor({ locks, stepId, passed, why }: WaitsForProps) {
   const { build, plan } = useBuild();
   const clock = useClock(60_000);
   if (locks.length === 0) return null;
+  if (locks.every((lock) => passed.has(lockKey(lock)))) {
+    return (
+      <p className="border-l-4 border-amber pl-3">
+        <b className="font-figures font-semibold">Gone past, {why}.</b> {locks.map(({ words }) => words).join(' ')}
+      </p>
+    );
+  }
   return (
     <ul
       className="grid gap-2 rounded-plate border-2 border-amber bg-amber-ground px-4 py-3 text-on-amber"

@@ -67,7 +67,4 @@ export type PlanFace = PlanDocument['faces'][number];
 export type PlanCheck = PlanStep['checks'][number];
 export type PlanCaution = PlanStep['cautions'][number];
 export type PlanMethod = PlanStep['methods'][number];
-export type PlanGlueUp = NonNullable<PlanStep['glueUp']>;
-export type PlanCoat = NonNullable<PlanStep['finish']>;
 export type PlanAdhesive = PlanDocument['adhesives'][number];
-export type PlanSupply = PlanDocument['supplies'][number];

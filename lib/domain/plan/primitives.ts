@@ -14,9 +14,6 @@ export const lengthSchema = z
   .max(MAX_LENGTH, 'a length of at most 100 m')
   .meta({ description: 'Length in whole units of 1/640 mm (1 in = 16256, 1 mm = 640).' });
 
-/** Length that may be zero or negative: positions and offsets. */
-export const offsetSchema = z.int('a whole number of 1/640 mm').min(-MAX_LENGTH).max(MAX_LENGTH);
-
 /** `=` and arithmetic on key sizes and counts, for example `=seat-length - 2 * side-thickness`. */
 export const formulaSchema = z
   .string()

@@ -174,7 +174,7 @@ async function greatest(
     transaction,
     type: QueryTypes.SELECT,
   });
-  return row?.stamp == null ? null : Number(row.stamp);
+  return row?.stamp ? Number(row.stamp) : null;
 }
 
 const greatestStampUpTo = (buildId: string, position: number, transaction: Transaction) =>

@@ -25,10 +25,12 @@ export interface BuildDetail {
   revision: PlanRevision;
   plan: PlanDocument;
   state: BuildState;
+  /** When it was read, ms: the clock by which the page is first drawn. */
+  readAt: number;
 }
 
 /** Builds on whose crew a person is, newest activity first. */
-export async function listBuilds(accountId: string, now: number): Promise<BuildRow[]> {
+export async function listBuilds(accountId: string, now = Date.now()): Promise<BuildRow[]> {
   const { CrewMember, Build } = db().models;
   const memberships = await CrewMember.findAll({ where: { accountId, removedAt: null } });
   const roles = new Map(memberships.map(({ buildId, role }) => [buildId, role]));
@@ -63,7 +65,7 @@ async function readDetail(build: Build): Promise<BuildDetail> {
     PlanRevision.findByPk(build.planRevisionId, { rejectOnEmpty: true }),
     Snapshot.findByPk(build.id),
   ]);
-  return { build, revision, plan: revision.document, state: snapshot?.state ?? emptyState() };
+  return { build, revision, plan: revision.document, state: snapshot?.state ?? emptyState(), readAt: Date.now() };
 }
 
 async function readLastEntryAt(build: Build): Promise<string | null> {

@@ -11,10 +11,3 @@ export function recordDeparture(
 ): Promise<Saved> {
   return recordEntry(db, buildId, 'departure-recorded', { target: { departureId: v7() }, value });
 }
-
-export function reviseDeparture(
-  db: AccountDatabase,
-  { buildId, departureId, what, why }: { buildId: string; departureId: string; what: string; why: string },
-): Promise<Saved> {
-  return recordEntry(db, buildId, 'departure-revised', { target: { departureId }, value: { what, why } });
-}

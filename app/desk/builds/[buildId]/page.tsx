@@ -35,7 +35,7 @@ export default async function BuildPage({ params }: { params: Promise<{ buildId:
           Take it to the bench
         </a>
       </div>
-      <BuildFacts plan={found.plan} state={found.state} openedAt={Date.now()} />
+      <BuildFacts plan={found.plan} state={found.state} openedAt={found.readAt} />
       <section className="grid gap-4 border-t-2 border-iron pt-6">
         <h2 className="text-2xl">Build log</h2>
         <BuildLog buildId={buildId} entries={entries} plan={found.plan} names={names} />

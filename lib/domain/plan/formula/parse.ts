@@ -2,7 +2,7 @@ import { FormulaError, tokenize, type Token } from './tokens';
 
 export type Expression =
   | { node: 'number'; value: number }
-  | { node: 'length'; value: number }
+  | { node: 'length'; value: number; text: string }
   | { node: 'name'; name: string }
   | { node: 'negate'; of: Expression }
   | { node: 'binary'; sign: '+' | '-' | '*' | '/'; left: Expression; right: Expression }
@@ -20,8 +20,7 @@ const MAX_DEPTH = 30;
  * @throws FormulaError saying what is wrong
  */
 export function parseFormula(formula: string): Expression {
-  const parser = new Parser(tokenize(formula.replace(/^=/, '')));
-  return parser.whole();
+  return new Parser(tokenize(formula)).whole();
 }
 
 class Parser {
@@ -30,15 +29,14 @@ class Parser {
 
   whole(): Expression {
     const expression = this.sum(0);
-    if (this.at < this.tokens.length) throw new FormulaError(`${this.here()} is not expected`, this.at);
+    if (this.at < this.tokens.length) throw new FormulaError(`${this.here()} is not expected`);
     return expression;
   }
 
   private here(): string {
     const token = this.tokens[this.at];
     if (!token) return 'the end of the formula';
-    if (token.kind === 'name') return `"${token.name}"`;
-    return token.kind === 'sign' ? `"${token.sign}"` : `the number ${token.value}`;
+    return `"${written(token)}" at character ${token.at + 1}`;
   }
 
   private sign(...signs: string[]): string | null {
@@ -49,7 +47,7 @@ class Parser {
   }
 
   private expect(sign: string): void {
-    if (this.sign(sign) === null) throw new FormulaError(`"${sign}" is missing before ${this.here()}`, this.at);
+    if (this.sign(sign) === null) throw new FormulaError(`"${sign}" is missing before ${this.here()}`);
   }
 
   private sum(depth: number): Expression {
@@ -69,7 +67,7 @@ class Parser {
   }
 
   private single(depth: number): Expression {
-    if (depth > MAX_DEPTH) throw new FormulaError(`parentheses go deeper than ${MAX_DEPTH}`, this.at);
+    if (depth > MAX_DEPTH) throw new FormulaError(`parentheses go deeper than ${MAX_DEPTH}`);
     if (this.sign('-')) return { node: 'negate', of: this.single(depth + 1) };
     if (this.sign('(')) {
       const inside = this.sum(depth + 1);
@@ -77,17 +75,17 @@ class Parser {
       return inside;
     }
     const token = this.tokens[this.at];
-    if (!token || token.kind === 'sign')
-      throw new FormulaError(`a size or number is missing before ${this.here()}`, this.at);
+    if (!token || token.kind === 'sign') throw new FormulaError(`a size or number is missing before ${this.here()}`);
     this.at += 1;
-    if (token.kind === 'number' || token.kind === 'length') return { node: token.kind, value: token.value };
+    if (token.kind === 'number') return { node: 'number', value: token.value };
+    if (token.kind === 'length') return { node: 'length', value: token.value, text: token.text };
     if (!this.sign('(')) return { node: 'name', name: token.name };
     return this.call(token.name, depth);
   }
 
   private call(name: string, depth: number): Expression {
     if (!Object.hasOwn(functions, name)) {
-      throw new FormulaError(`"${name}" is not one of ${Object.keys(functions).join(', ')}`, this.at);
+      throw new FormulaError(`"${name}" is not one of ${Object.keys(functions).join(', ')}`);
     }
     const args = [this.sum(depth + 1)];
     while (this.sign(',')) args.push(this.sum(depth + 1));
@@ -96,10 +94,22 @@ class Parser {
     if (args.length < least || args.length > most) {
       throw new FormulaError(
         `${name} takes ${least === most ? least : `${least} to ${most}`} values, not ${args.length}`,
-        this.at,
       );
     }
     return { node: 'call', name: name as FormulaFunction, args };
+  }
+}
+
+function written(token: Token): string {
+  switch (token.kind) {
+    case 'name':
+      return token.name;
+    case 'sign':
+      return token.sign;
+    case 'number':
+      return String(token.value);
+    case 'length':
+      return token.text;
   }
 }
 
