@@ -24,8 +24,8 @@ export const steps: PlanDocumentInput['steps'] = [
     methods: [
       {
         id: 'legs-hand',
-        name: 'Hand saw and bench hook',
-        tools: ['Hand saw', 'Bench hook'],
+        name: 'Hand saw and sawing board',
+        tools: ['Hand saw', 'Sawing board'],
         body: 'Clamp two strips together and saw both.',
         cautions: [c.chisel],
       },

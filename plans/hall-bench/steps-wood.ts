@@ -277,8 +277,8 @@ export const woodSteps: PlanDocumentInput['steps'] = [
     methods: [
       {
         id: 'small-hand',
-        name: 'Back saw and bench hook',
-        tools: ['Back saw', 'Bench hook'],
+        name: 'Back saw and sawing board',
+        tools: ['Back saw', 'Sawing board'],
         body: 'Slow for twenty pieces and the safest.',
         cautions: [c.chisel],
       },
