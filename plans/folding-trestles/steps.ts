@@ -32,7 +32,7 @@ export const steps: PlanDocumentInput['steps'] = [
       {
         id: 'legs-mitre',
         name: 'Mitre saw',
-        tools: ['Mitre saw', 'Stop block'],
+        tools: ['Stop block', 'Mitre saw'],
         body: 'Support the long end level with the table.',
         cautions: [c.crosscut],
       },
@@ -56,7 +56,7 @@ export const steps: PlanDocumentInput['steps'] = [
     minutes: { min: 20, max: 30 },
     body: 'Four outer rails **700 mm**, then four inner rails at the width of the inner frame: it follows from the thickness that you measured.',
     uses: [{ part: 'outer-top' }, { part: 'inner-top' }, { part: 'outer-low' }, { part: 'inner-low' }],
-    tools: ['Mitre saw or hand saw', 'Stop block'],
+    tools: ['Stop block', 'Mitre saw or hand saw'],
     cautions: [c.crosscut, c.ears],
   },
   {

@@ -285,7 +285,7 @@ export const woodSteps: PlanDocumentInput['steps'] = [
       {
         id: 'small-mitre',
         name: 'Mitre saw with a clamp',
-        tools: ['Mitre saw', 'Stop block', 'Hold-down clamp'],
+        tools: ['Stop block', 'Hold-down clamp', 'Mitre saw'],
         body: 'Stop block on the far side, clamp on every piece under 8 in.',
         cautions: [c.small, c.crosscut],
       },
@@ -301,7 +301,7 @@ export const woodSteps: PlanDocumentInput['steps'] = [
     minutes: { min: 15, max: 25 },
     body: 'Tray front and back AA and two ends AB, **2 1/2 in** wide, from the poplar.',
     uses: [{ part: 'tray-long' }, { part: 'tray-end' }],
-    tools: ['Mitre saw or back saw', 'Stop block'],
+    tools: ['Stop block', 'Mitre saw or back saw'],
     cautions: [c.crosscut, c.small, c.ears],
   },
 ];
