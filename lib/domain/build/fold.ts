@@ -1,6 +1,6 @@
 import type { StandingEntry } from './entry';
 import { compareStanding } from './entry';
-import { entryVersion } from './kinds';
+import { entryVersion } from './entry-versions';
 import type { BuildState, Claim, CollectionItem } from './state';
 
 /** State of a build with no entries. Keys come from entries, so every record is without a prototype. */

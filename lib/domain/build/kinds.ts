@@ -176,8 +176,3 @@ export type EntryTarget<K extends EntryKind> = z.infer<(typeof entryKinds)[K]['t
 export type EntryValue<K extends EntryKind> = z.infer<(typeof entryKinds)[K]['value']>;
 export type EntryValueInput<K extends EntryKind> = z.input<(typeof entryKinds)[K]['value']>;
 export type PassedLock = z.infer<typeof passedLock>;
-
-/** Version at which this program writes a kind, or undefined for a kind it does not know. */
-export function entryVersion(kind: string): number | undefined {
-  return Object.hasOwn(entryKinds, kind) ? entryKinds[kind as EntryKind].v : undefined;
-}

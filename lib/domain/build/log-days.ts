@@ -1,6 +1,6 @@
 import type { PlanDocument } from '../plan/document';
 import { describeEntry, type DescribeOptions } from './describe-entry';
-import { entryVersion } from './kinds';
+import { entryVersion } from './entry-versions';
 import { compareStanding, type StandingEntry } from './entry';
 import { isUndoable, undoneIds } from './undo';
 

@@ -1,7 +1,9 @@
 import { z } from 'zod';
 import type { LogEntry } from './entry';
-import { entryKinds, entryVersion, MAX_NOTE_CHARACTERS, type EntryKind } from './kinds';
+import { entryVersion } from './entry-versions';
+import { entryKinds, MAX_NOTE_CHARACTERS, type EntryKind } from './kinds';
 import { entryMigrations, migrateParts, type EntryMigrations } from './migrate-entry';
+import { storable } from './storable-text';
 import type { RefusalCode } from './wire';
 
 /** Largest entry, in UTF-16 units of its JSON text; the longest note fits with room to spare. */
@@ -57,7 +59,8 @@ export function readEntry(raw: unknown, migrations: EntryMigrations = entryMigra
     const tooLong = value.error.issues.find((issue) => issue.code === 'too_big');
     return refuse(tooLong ? 'too-large' : 'malformed', `${kind}: ${firstProblem(value.error)}.`);
   }
-  return { ok: true, entry: { ...frame.data, kind, v: known, target: target.data, value: value.data } as LogEntry };
+  const judged = storable({ target: target.data, value: value.data });
+  return { ok: true, entry: { ...frame.data, ...judged, kind, v: known } as LogEntry };
 }
 
 function refuse(code: RefusalCode, message: string): ReadEntryResult {
@@ -71,5 +74,11 @@ function firstProblem(error: z.ZodError): string {
 }
 
 function sizeOf(raw: unknown): number {
-  return JSON.stringify(raw)?.length ?? 0;
+  try {
+    return JSON.stringify(raw)?.length ?? 0;
+  } catch (error) {
+    // Nested past what the engine can write down: no entry of ours.
+    if (error instanceof RangeError) return Infinity;
+    throw error;
+  }
 }

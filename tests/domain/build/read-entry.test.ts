@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { MAX_NOTE_CHARACTERS } from '@/lib/domain/build/kinds';
+import { entryVersion } from '@/lib/domain/build/entry-versions';
+import { entryKinds, MAX_NOTE_CHARACTERS } from '@/lib/domain/build/kinds';
 import { migrateParts } from '@/lib/domain/build/migrate-entry';
 import { readEntry } from '@/lib/domain/build/read-entry';
 import { assignStamp, estimateStamp } from '@/lib/domain/build/stamp';
@@ -46,6 +47,21 @@ describe('readEntry', () => {
     expect(result.ok ? '' : result.message.length).toBeGreaterThan(10);
   });
 
+  it('keeps a note that was cut in the middle of an emoji, without the half that no database takes', () => {
+    const result = readEntry({ ...good, value: { text: 'dry fit \ud83d and a \0 between 🪵', stepId: null } });
+    expect(result).toMatchObject({ ok: true, entry: { value: { text: 'dry fit \ufffd and a \ufffd between 🪵' } } });
+  });
+
+  it.each([
+    [5_000, 'malformed'],
+    [25_000, 'malformed'],
+    [50_000, 'too-large'],
+  ])('refuses what is nested %i levels deep', (levels, code) => {
+    const deep = JSON.parse('['.repeat(levels) + ']'.repeat(levels)) as unknown;
+    expect(readEntry({ ...good, value: deep }).ok).toBe(false);
+    expect([code, 'too-large']).toContain((readEntry({ ...good, value: deep }) as { code: string }).code);
+  });
+
   it('says how long a note may be', () => {
     const result = readEntry({ ...good, value: { text: 'x'.repeat(1_000_000), stepId: null } });
     expect(result.ok ? '' : result.message).toContain(String(MAX_NOTE_CHARACTERS));
@@ -67,6 +83,10 @@ describe('readEntry', () => {
     );
   });
 });
+
+it.each(Object.entries(entryKinds))('the version of %s is that of its shape', (kind, { v }) =>
+  expect(entryVersion(kind)).toBe(v),
+);
 
 describe('S4: the stamp', () => {
   const base = { madeAt: 5_000, clockOffsetMs: 0, receivedAt: 10_000, seenStamp: null, previousStamp: null };
