@@ -9,6 +9,8 @@ import { Mendable, runMain, say } from './setup/say.mjs';
 import { run } from './setup/run.mjs';
 
 const DEV = process.argv.includes('--dev');
+/** First start after the database was played back from a backup: npm start -- --restored */
+const RESTORED = process.argv.includes('--restored');
 const HOST = '127.0.0.1';
 const MAIL = { smtpPort: 2525, pagePort: 8025, user: 'holdfast', password: 'holdfast' };
 
@@ -59,7 +61,8 @@ runMain(async () => {
       env.SMTP_URL = `smtp://${MAIL.user}:${MAIL.password}@${HOST}:${MAIL.smtpPort}`;
       pages.push(`Letters    http://${HOST}:${MAIL.pagePort}  (nothing is really sent)`);
     }
-    const prepared = await run(process.execPath, [...TSX, 'scripts/migrate-and-seed.ts', '--seed'], { env });
+    const prepare = [...TSX, 'scripts/migrate-and-seed.ts', '--seed', ...(RESTORED ? ['--restored'] : [])];
+    const prepared = await run(process.execPath, prepare, { env });
     if (prepared.code !== 0) throw databaseProblem(prepared.output);
     if (prepared.output.trim()) say(prepared.output.trim());
     if (!DEV) await buildWhenChanged();

@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { migrate, migrationFiles } from '@/lib/server/migrate';
@@ -33,6 +34,27 @@ describe('migrations', () => {
     expect(await migrate(database().sequelize)).toEqual(migrationFiles());
     await expect(await schema()).toMatchFileSnapshot(path.resolve('migrations/schema.txt'));
     expect(await migrate(database().sequelize)).toEqual([]);
+  });
+
+  it('give no retired name to anything again', async () => {
+    const retired = readFileSync('migrations/retired-names.txt', 'utf8')
+      .split('\n')
+      .filter((line) => line !== '' && !line.startsWith('#'));
+    const lines = (await schema()).split('\n');
+    const used = new Set(lines.flatMap((line) => /^(\w+)\.\w+(?= )/.exec(line)?.slice(0, 2) ?? []));
+    expect(used).toContain('accounts.email');
+    expect(used).toContain('accounts');
+    expect(retired.filter((name) => used.has(name))).toEqual([]);
+  });
+
+  it('give every foreign key an index that begins with it and leaves no row out', async () => {
+    const [bare] = await database().sequelize.query(`
+      select c.conrelid::regclass || ' ' || pg_get_constraintdef(c.oid) as key from pg_constraint c
+      where c.contype = 'f' and c.connamespace = 'public'::regnamespace and not exists (
+        select from pg_index i
+        where i.indrelid = c.conrelid and i.indpred is null
+          and (i.indkey::int2[])[0:cardinality(c.conkey) - 1] = c.conkey)`);
+    expect(bare).toEqual([]);
   });
 
   it('hold the rules that the database can hold', async () => {

@@ -4,13 +4,12 @@ import type { StandingEntry } from '@/lib/domain/build/entry';
 import { foldEntries } from '@/lib/domain/build/fold';
 import type { LogPush } from '@/lib/domain/build/wire';
 import { appendLog } from '@/lib/server/commands/append-log';
-import { importPlan } from '@/lib/server/commands/import-plan';
-import { startBuild } from '@/lib/server/commands/start-build';
 import type { Account } from '@/lib/server/auth/read-session';
 import { readBuildLog } from '@/lib/server/queries/build-log';
 import { makeAccount } from '../../support/accounts';
+import { startedBuild } from '../../support/builders';
 import { useDatabase } from '../../support/database';
-import { demoPlan } from '../../support/plans';
+import { noteEntry } from '../../support/raw-entries';
 
 const database = useDatabase();
 const NOW = 1_800_000_000_000;
@@ -20,42 +19,11 @@ let buildId: string;
 const phone = v7();
 
 beforeEach(async () => {
-  owner = await makeAccount();
-  const { planId } = await importPlan(owner, demoPlan('folding-trestles'));
-  ({ buildId } = await startBuild(owner, planId, 'Trestles'));
+  ({ owner, buildId } = await startedBuild());
 });
 
-interface Made {
-  id?: string;
-  deviceId?: string;
-  madeAt?: number;
-  seen?: number;
-  text?: string;
-  kind?: string;
-  v?: number;
-  of?: string;
-}
-
-const note = ({
-  id = v7(),
-  deviceId = phone,
-  madeAt = NOW,
-  seen = 0,
-  text = 'a note',
-  kind = 'note-written',
-  v = 1,
-  of = buildId,
-}: Made = {}) => ({
-  id,
-  buildId: of,
-  deviceId,
-  madeAt,
-  seen,
-  kind,
-  v,
-  target: { noteId: id },
-  value: { text, stepId: null },
-});
+const note = ({ of = buildId, ...made }: Partial<Parameters<typeof noteEntry>[0]> & { of?: string } = {}) =>
+  noteEntry({ deviceId: phone, madeAt: NOW, ...made, buildId: of });
 
 const push = (entries: LogPush['entries'], { account = owner, deviceId = phone, cursor = 0, at = NOW } = {}) =>
   appendLog(buildId, account, { deviceId, accountId: account.id, cursor, sentAt: at, entries }, at);
