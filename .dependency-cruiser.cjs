@@ -49,7 +49,12 @@ module.exports = {
       from: { pathNot: '^(lib/server|migrations|tests|models|scripts)/' },
       to: { path: '^models/' },
     },
-    { name: 'nothing-imports-tests', severity: 'error', from: { pathNot: '^tests/' }, to: { path: '^tests/' } },
+    {
+      name: 'nothing-imports-tests',
+      severity: 'error',
+      from: { pathNot: '^(tests|scripts/(benchmarks/|take-pictures))' },
+      to: { path: '^tests/' },
+    },
   ],
   options: {
     doNotFollow: { path: 'node_modules' },

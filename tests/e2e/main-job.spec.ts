@@ -110,6 +110,7 @@ test('an afternoon at the bench with the server stopped, and all of it in Postgr
     await openStep(page, buildId, 'glue-halves');
     await page.getByRole('button', { name: 'First glue', exact: true }).click();
     await page.getByRole('button', { name: /Clamps on/ }).click();
+    await expect(page.getByRole('button', { name: 'Done', exact: true })).toBeVisible();
     await openStep(page, buildId, 'dry-fit-carcass');
     await expect(page.getByRole('button', { name: 'Done', exact: true })).toHaveCount(0);
     for (const stepId of ['layout-sides', 'cut-dados', 'cut-rabbets', 'notch-divider', 'dry-fit-carcass']) {
