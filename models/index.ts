@@ -59,6 +59,7 @@ export function defineModels(sequelize: Sequelize) {
   Plan.belongsTo(PlanRevision, { foreignKey: 'currentRevisionId', as: 'currentRevision', constraints: false });
   PlanRevision.belongsTo(Plan, { foreignKey: 'planId', as: 'plan' });
   PlanRevision.hasMany(PlanFile, { foreignKey: 'revisionId', as: 'files' });
+  PlanFile.belongsTo(PlanRevision, { foreignKey: 'revisionId', as: 'revision' });
   PlanFile.belongsTo(StoredFile, { foreignKey: 'fileId', as: 'file' });
   Build.belongsTo(PlanRevision, { foreignKey: 'planRevisionId', as: 'revision' });
   Build.hasMany(CrewMember, { foreignKey: 'buildId', as: 'crew' });

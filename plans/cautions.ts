@@ -16,7 +16,7 @@ export const cautions = {
   ),
   crosscut: danger(
     'Hands',
-    'Hands 6 in from the blade on each side, piece held to the fence. Wait till the blade stands still before you lift it or clear an offcut.',
+    'Hands well away from the blade on each side, 6 in (150 mm) at the least, piece held to the fence. Wait till the blade stands still before you lift it or clear an offcut.',
   ),
   small: danger('Short piece', 'Under 8 in hold it with a clamp, not a hand, or cut it from a longer piece first.'),
   trackSaw: danger(

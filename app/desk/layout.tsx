@@ -1,14 +1,8 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
+import { DeskNav } from '@/components/desk/desk-nav';
 import { DeskQueries } from '@/components/desk/desk-queries';
-import { linkLook } from '@/components/ui/link-look';
 import { Mark } from '@/components/ui/mark';
-
-const places = [
-  { href: '/desk', name: 'Builds' },
-  { href: '/desk/plans', name: 'Plans' },
-  { href: '/desk/account', name: 'Account' },
-];
 
 export default function DeskLayout({ children }: { children: ReactNode }) {
   return (
@@ -19,17 +13,7 @@ export default function DeskLayout({ children }: { children: ReactNode }) {
             <Mark />
             Holdfast
           </Link>
-          <nav aria-label="Desk" className="flex flex-wrap gap-x-6">
-            {places.map(({ href, name }) => (
-              <Link key={href} href={href} className={linkLook.quiet}>
-                {name}
-              </Link>
-            ))}
-            {/* The bench is a page of its own that works with no signal: reached by a whole load. */}
-            <a href="/bench" className={linkLook.quiet}>
-              Bench
-            </a>
-          </nav>
+          <DeskNav />
         </div>
       </header>
       <main className="mx-auto w-full max-w-5xl grow px-5 py-8 sm:px-8">

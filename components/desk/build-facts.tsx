@@ -17,7 +17,7 @@ export function BuildFacts({ plan, state, openedAt }: { plan: PlanDocument; stat
   return (
     <div className="grid gap-6">
       <div className="grid gap-2">
-        <ProgressRule done={progress.stepsDone} skipped={progress.stepsSkipped} inAll={progress.stepsInAll} />
+        <ProgressRule stages={progress.byStage} />
         <dl className="figures grid grid-cols-2 gap-4 text-lg sm:grid-cols-4">
           <Fact name="Steps done" value={`${progress.stepsDone} of ${progress.stepsInAll}`} />
           <Fact name="Pieces cut" value={`${progress.piecesCut} of ${progress.piecesInAll}`} />

@@ -47,7 +47,7 @@ export function BuildList({ initial }: { initial: BuildSummary[] }) {
 }
 
 function BuildLine({ build }: { build: BuildSummary }) {
-  const { stepsDone, stepsSkipped, stepsInAll, minutesWorked, minutesLeft } = build.progress;
+  const { stepsDone, stepsSkipped, stepsInAll, minutesWorked, minutesLeft, byStage } = build.progress;
   return (
     <li className="grid gap-2 border-t-2 border-iron py-5">
       <div className="flex flex-wrap items-baseline justify-between gap-x-6">
@@ -61,7 +61,7 @@ function BuildLine({ build }: { build: BuildSummary }) {
           {build.role !== 'owner' && ` · you are its ${build.role}`}
         </p>
       </div>
-      <ProgressRule done={stepsDone} skipped={stepsSkipped} inAll={stepsInAll} />
+      <ProgressRule stages={byStage} />
       <p className="figures flex flex-wrap gap-x-6 text-lg">
         <span>
           {stepsDone} of {stepsInAll} steps done{stepsSkipped > 0 && `, ${stepsSkipped} skipped`}

@@ -5,6 +5,7 @@ import type { StandingEntry } from '@/lib/domain/build/entry';
 import { logDays, type LogItem } from '@/lib/domain/build/log-days';
 import { formatLength } from '@/lib/domain/measure';
 import type { PlanDocument } from '@/lib/domain/plan/document';
+import { LogPhoto } from './log-photo';
 
 const never = () => () => undefined;
 
@@ -44,12 +45,12 @@ export function BuildLog({ buildId, entries, plan, names }: BuildLogProps) {
     );
   }
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-1 gap-8">
       {days.reverse().map(({ day, sessions }) => (
-        <section key={day} className="grid gap-3">
+        <section key={day} className="grid grid-cols-1 gap-3">
           <h3 className="text-xl">{day}</h3>
           {sessions.map(({ sessionId, items }, i) => (
-            <ol key={sessionId ?? i} className="grid border-l-2 border-iron pl-4">
+            <ol key={sessionId ?? i} className="grid grid-cols-1 border-l-2 border-iron pl-4">
               {items.map((item) => (
                 <LogLine key={item.entryId} item={item} buildId={buildId} name={names[item.accountId]} />
               ))}
@@ -63,20 +64,13 @@ export function BuildLog({ buildId, entries, plan, names }: BuildLogProps) {
 
 function LogLine({ item, buildId, name }: { item: LogItem; buildId: string; name: string | undefined }) {
   return (
-    <li className="grid gap-1 border-b border-line py-2">
-      <p className={`text-lg whitespace-pre-wrap ${item.undone ? 'text-soft line-through' : ''}`}>{item.words}</p>
-      {item.photo && (
-        // The picture is private to the crew and changes with nobody: the framework's optimiser has no part in it.
-        // eslint-disable-next-line @next/next/no-img-element
-        <img
-          src={`/api/builds/${buildId}/photos/${item.photo}`}
-          alt={item.words}
-          loading="lazy"
-          className="max-h-80 max-w-full justify-self-start rounded-[3px] border border-line"
-        />
-      )}
+    <li className="grid min-w-0 grid-cols-1 gap-1 border-b border-line py-2">
+      <p className={`text-lg wrap-anywhere whitespace-pre-wrap ${item.undone ? 'text-soft line-through' : ''}`}>
+        {item.words}
+      </p>
+      {item.photo && <LogPhoto buildId={buildId} sha256={item.photo} words={item.words} />}
       <p className="text-base text-soft">
-        <LocalTime at={new Date(item.at).toISOString()} />
+        <LocalTime at={new Date(item.at).toISOString()} show="time" />
         {name && ` · ${name}`}
         {item.undone && ' · undone'}
       </p>

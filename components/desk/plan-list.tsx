@@ -4,13 +4,14 @@ import { useState } from 'react';
 import { send } from '@/components/account/send';
 import { Button } from '@/components/ui/button';
 import { linkLook } from '@/components/ui/link-look';
+import { Notice } from '@/components/ui/notice';
 import { planListSchema, type PlanSummary } from '@/lib/domain/build/summary';
 import { hoursRange } from './hours';
 import { StartBuild } from './start-build';
 
 /** Plans that the person may build from: their own and the public ones. */
 export function PlanList({ initial }: { initial: PlanSummary[] }) {
-  const { data } = useQuery({
+  const { data, error } = useQuery({
     queryKey: ['plans'],
     initialData: initial,
     queryFn: async () => {
@@ -21,11 +22,18 @@ export function PlanList({ initial }: { initial: PlanSummary[] }) {
   });
   if (data.length === 0) return <p className="text-xl">No plan yet. Bring one in from its file below.</p>;
   return (
-    <ul className="grid">
-      {data.map((plan) => (
-        <PlanLine key={plan.id} plan={plan} />
-      ))}
-    </ul>
+    <div className="grid gap-4">
+      {error && (
+        <Notice tone="wait" live="status">
+          This list is as it was: {error.message}
+        </Notice>
+      )}
+      <ul className="grid">
+        {data.map((plan) => (
+          <PlanLine key={plan.id} plan={plan} />
+        ))}
+      </ul>
+    </div>
   );
 }
 

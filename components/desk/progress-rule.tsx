@@ -1,15 +1,39 @@
-/** A rule laid flat: one graduation a step, done ones heavy. Its words stand beside it. */
-export function ProgressRule({ done, skipped, inAll }: { done: number; skipped: number; inAll: number }) {
+interface Stage {
+  stageId: string;
+  done: number;
+  skipped: number;
+  inAll: number;
+}
+
+/**
+ * A rule laid flat: one graduation a step, longer where a stage begins; within a stage first what is done, heavy, then
+ * what was skipped, broken. Its words stand beside it.
+ */
+export function ProgressRule({ stages }: { stages: readonly Stage[] }) {
+  const marks = stages.flatMap(({ stageId, done, skipped, inAll }) =>
+    Array.from({ length: inAll }, (_, i) => ({
+      key: `${stageId}/${i}`,
+      top: i === 0 ? 2 : 11,
+      mark: i < done ? 'done' : i < done + skipped ? 'skipped' : 'open',
+    })),
+  );
   return (
-    <svg viewBox={`0 0 ${inAll * 10} 24`} preserveAspectRatio="none" className="h-6 w-full" aria-hidden="true">
-      <path d={`M0 23H${inAll * 10}`} stroke="var(--iron)" strokeWidth="2" />
-      {Array.from({ length: inAll }, (_, i) => (
+    <svg
+      viewBox={`0 0 ${marks.length * 10} 24`}
+      preserveAspectRatio="none"
+      className="h-6 w-full"
+      fill="none"
+      aria-hidden="true"
+    >
+      <path d={`M0 23H${marks.length * 10}`} stroke="var(--iron)" strokeWidth="2" vectorEffect="non-scaling-stroke" />
+      {marks.map(({ key, top, mark }, i) => (
         <path
-          key={i}
-          d={`M${i * 10 + 5} ${i % 5 === 0 ? 4 : 10}V22`}
-          stroke={i < done ? 'var(--iron)' : 'var(--soft)'}
-          strokeWidth={i < done ? 5 : 1}
-          strokeDasharray={i >= done && i < done + skipped ? '3 3' : undefined}
+          key={key}
+          d={`M${i * 10 + 5} ${top}V22`}
+          stroke={mark === 'done' ? 'var(--iron)' : 'var(--soft)'}
+          strokeWidth={mark === 'done' ? 4 : 1}
+          strokeDasharray={mark === 'skipped' ? '3 3' : undefined}
+          vectorEffect="non-scaling-stroke"
         />
       ))}
     </svg>

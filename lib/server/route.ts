@@ -53,7 +53,8 @@ type RouteHandler = (request: Request, context: { params: Promise<Values> }) => 
 /**
  * Makes a route handler. In this order: proof that a changing request comes from our own pages, the kind of content,
  * who asks, parsing of path, query and body, the policy, then the handler. A value that the handler returns goes out as
- * JSON with status 200 (204 when there is none), a Response as it is; a failure as problem+json. Nothing may be cached.
+ * JSON with status 200 (204 when there is none), a Response as it is; a failure as problem+json. Nothing may be cached,
+ * unless the handler's own Response says how.
  */
 export function route<
   A extends Auth,
@@ -110,7 +111,7 @@ function toResponse(answer: unknown): Response {
 }
 
 function uncached(response: Response): Response {
-  response.headers.set('cache-control', 'no-store');
+  if (!response.headers.has('cache-control')) response.headers.set('cache-control', 'no-store');
   response.headers.set('x-content-type-options', 'nosniff');
   return response;
 }

@@ -18,7 +18,7 @@ export interface Taken {
  */
 export async function takeAnswer(db: AccountDatabase, answer: LogAnswer): Promise<Taken> {
   const taken = await durably<Taken>(db, () =>
-    db.transaction('rw', db.builds, db.entries, async (): Promise<Taken> => {
+    db.transaction('rw', db.builds, db.entries, db.photos, async (): Promise<Taken> => {
       const build = await db.builds.get(answer.buildId);
       if (!build) return { more: false, restored: false };
       if (build.epoch !== answer.epoch) return startOver(db, answer);
@@ -53,7 +53,7 @@ export async function takeAnswer(db: AccountDatabase, answer: LogAnswer): Promis
   return taken;
 }
 
-/** S7: forget the positions of the old database, hold everything that was acknowledged, and pull from the start. */
+/** S7: forget the positions of the old database, hold all that was acknowledged, photos too, and pull from the start. */
 async function startOver(db: AccountDatabase, { buildId, epoch }: LogAnswer): Promise<Taken> {
   const rows = await db.entries.where({ buildId, sync: 'accepted' }).toArray();
   // Others' entries come back from the server or from their own phones; only this account's are this phone's to send.
@@ -61,6 +61,11 @@ async function startOver(db: AccountDatabase, { buildId, epoch }: LogAnswer): Pr
   const others = rows.filter((row) => !own.includes(row));
   await db.entries.bulkPut(own.map((row) => ({ ...row, position: null, sync: 'held' }) as EntryRow));
   await db.entries.bulkDelete(others.map(({ id }) => id));
+  const confirmed = db.photos
+    .where('buildId')
+    .equals(buildId)
+    .filter(({ sync }) => sync === 'confirmed');
+  await confirmed.modify({ sync: 'held' });
   await db.builds.update(buildId, { epoch, cursor: 0, state: foldEntries(await standingEntries(db, buildId)) });
   return { more: true, restored: true };
 }

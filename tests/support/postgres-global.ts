@@ -1,9 +1,7 @@
+import { randomBytes } from 'node:crypto';
 import { Client } from 'pg';
 import { openDatabase } from '@/lib/server/db';
 import { migrate } from '@/lib/server/migrate';
-
-/** Database that the files of one run are copied from, so that each starts migrated without running the migrations. */
-export const TEMPLATE = 'holdfast_test_template';
 
 export function testServerUrl(): string {
   const url = process.env.TEST_DATABASE_URL;
@@ -18,13 +16,31 @@ export function urlOf(database: string): string {
   return url.href;
 }
 
-export default async function setup(): Promise<void> {
-  const admin = new Client({ connectionString: testServerUrl() });
-  await admin.connect();
-  await admin.query(`drop database if exists ${TEMPLATE} with (force)`);
-  await admin.query(`create database ${TEMPLATE}`);
-  await admin.end();
-  const { sequelize } = openDatabase(urlOf(TEMPLATE), 2);
+/** Database that the files of this run are copied from, so that each starts migrated without running the migrations. */
+export function templateName(): string {
+  const name = process.env.TEST_TEMPLATE;
+  if (!name) throw new Error('the template of this run has no name: global set-up did not run');
+  return name;
+}
+
+/** Says one thing to the server of the tests. */
+export async function tellServer(statement: string): Promise<void> {
+  const client = new Client({ connectionString: testServerUrl() });
+  await client.connect();
+  try {
+    await client.query(statement);
+  } finally {
+    await client.end();
+  }
+}
+
+/** Makes the template under a name of this run's own, and gives what takes it away again. */
+export default async function setup(): Promise<() => Promise<void>> {
+  const template = `holdfast_template_${randomBytes(6).toString('hex')}`;
+  process.env.TEST_TEMPLATE = template;
+  await tellServer(`create database ${template}`);
+  const { sequelize } = openDatabase(urlOf(template), 2);
   await migrate(sequelize);
   await sequelize.close();
+  return () => tellServer(`drop database if exists ${template} with (force)`);
 }

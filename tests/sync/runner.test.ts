@@ -155,6 +155,18 @@ describe('photos', () => {
     expect(await phone.db.photos.get([BUILD, 'a'.repeat(64)])).toMatchObject({ sync: 'confirmed', length: 3 });
   });
 
+  it('S7: is sent again after a restore, since the backup may not hold its bytes', async () => {
+    await photo();
+    await phone.runner.syncNow();
+    expect(server.photos.size).toBe(1);
+    server.restore(0);
+    expect(server.photos.size).toBe(0);
+    for (let round = 0; round < 2; round += 1) await phone.runner.syncNow();
+    expect(server.photos.size).toBe(1);
+    expect(server.log).toHaveLength(1);
+    expect(await getHeldCounts(phone.db)).toMatchObject({ entries: 0, photos: 0 });
+  });
+
   it('S9: a photo the server will not have is kept and named', async () => {
     await photo();
     let asked = 0;

@@ -3,7 +3,7 @@ import type { LogEntry } from './entry';
 import { entryVersion } from './entry-versions';
 import { entryKinds, MAX_NOTE_CHARACTERS, type EntryKind } from './kinds';
 import { entryMigrations, migrateParts, type EntryMigrations } from './migrate-entry';
-import { storable } from './storable-text';
+import { storable } from '../storable-text';
 import type { RefusalCode } from './wire';
 
 /** Largest entry, in UTF-16 units of its JSON text; the longest note fits with room to spare. */

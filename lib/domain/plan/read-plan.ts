@@ -1,3 +1,4 @@
+import { isStorable } from '../storable-text';
 import { MAX_PLAN_BYTES, MAX_PLAN_DEPTH, planDocumentSchema, type PlanDocument } from './document';
 import { checkIntegrity } from './integrity';
 import { pathText, type PlanProblem } from './plan-problem';
@@ -33,6 +34,14 @@ export function readPlan(input: unknown): ReadPlanResult {
       tooDeep,
       `nesting of at most ${MAX_PLAN_DEPTH} levels`,
       'The document is nested deeper than a plan can be.',
+    );
+  }
+  const unstorable = pathOfUnstorable(value);
+  if (unstorable !== null) {
+    return one(
+      unstorable,
+      'text without null characters or half characters',
+      'The text here holds a character that is none, left by a program that cut it or wrote it wrong.',
     );
   }
   if (typeof value !== 'object' || value === null || Array.isArray(value)) {
@@ -118,6 +127,18 @@ function pathBeyond(root: unknown, most: number): string | null {
     for (const [key, value] of entries) {
       if (typeof value === 'object' && value !== null) stack.push({ value, path: [...next.path, key] });
     }
+  }
+  return null;
+}
+
+/** Path of the first text that could not be stored or hashed, or null. The depth is known to be small. */
+function pathOfUnstorable(value: unknown, path: PropertyKey[] = []): string | null {
+  if (typeof value === 'string') return isStorable(value) ? null : pathText(path);
+  if (typeof value !== 'object' || value === null) return null;
+  const entries = Array.isArray(value) ? value.map((held, i) => [i, held] as const) : Object.entries(value);
+  for (const [key, held] of entries) {
+    const found = pathOfUnstorable(held, [...path, key]);
+    if (found !== null) return found;
   }
   return null;
 }

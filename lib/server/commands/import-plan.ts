@@ -4,6 +4,8 @@ import { canonicalText } from '@/lib/domain/plan/canonical-text';
 import type { PlanDocument } from '@/lib/domain/plan/document';
 import type { PlanProblem } from '@/lib/domain/plan/plan-problem';
 import { readPlan } from '@/lib/domain/plan/read-plan';
+import type { PlanFile } from '@/models/plan-file';
+import type { StoredFile } from '@/models/stored-file';
 import type { Account } from '../auth/read-session';
 import { db } from '../db';
 import { AppError } from '../errors';
@@ -25,6 +27,22 @@ export function contentHashOf(plan: PlanDocument): string {
 }
 
 /**
+ * Takes the bytes of a plan file in, as {@link importPlan} does its text.
+ *
+ * @throws AppError `invalid` with `problems`, also where the bytes are no text
+ */
+export function importPlanFile(account: Account, bytes: Uint8Array): Promise<ImportedPlan> {
+  let text: string;
+  try {
+    text = new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+  } catch (error) {
+    if (!(error instanceof TypeError)) throw error;
+    throw invalidPlan([{ path: '', expected: 'JSON text in UTF-8', message: 'The file is not text in UTF-8.' }]);
+  }
+  return importPlan(account, text);
+}
+
+/**
  * Takes a plan file in: a new plan of this person, or a new revision of the plan of theirs with the same id. Content that
  * is there already gives the revision it has.
  *
@@ -37,7 +55,7 @@ export async function importPlan(
 ): Promise<ImportedPlan> {
   const read = readPlan(input);
   if (!read.ok) throw invalidPlan(read.problems);
-  const { plan, files } = await takeFilesOut(read.plan);
+  const { plan, files } = await takeFilesOut(account, read.plan);
   const contentHash = contentHashOf(plan);
   const { Plan, PlanRevision, PlanFile, Account } = db().models;
 
@@ -70,12 +88,13 @@ export async function importPlan(
 }
 
 async function takeFilesOut(
+  account: Account,
   plan: PlanDocument,
 ): Promise<{ plan: PlanDocument; files: { attachmentId: string; fileId: string }[] }> {
   const problems: PlanProblem[] = [];
   const files: { attachmentId: string; fileId: string }[] = [];
   for (const [i, { content, ...facts }] of plan.attachments.entries()) {
-    const known = content ? null : await db().models.StoredFile.findOne({ where: { sha256: facts.sha256 } });
+    const known = content ? null : await findOwnFile(account.id, facts.sha256);
     const bytes = content ? Buffer.from(content, 'base64') : null;
     const path = `attachments[${i}].content`;
     if (!bytes && !known) {
@@ -100,6 +119,24 @@ async function takeFilesOut(
   }
   if (problems.length > 0) throw invalidPlan(problems);
   return { plan: { ...plan, attachments: plan.attachments.map(({ content: _content, ...facts }) => facts) }, files };
+}
+
+/** A file that a plan of this person's already has. Others' files are not to be had by naming their hash. */
+async function findOwnFile(accountId: string, hash: string): Promise<StoredFile | null> {
+  const { Plan, PlanFile, PlanRevision, StoredFile } = db().models;
+  const link = (await PlanFile.findOne({
+    include: [
+      { model: StoredFile, as: 'file', where: { sha256: hash } },
+      {
+        model: PlanRevision,
+        as: 'revision',
+        required: true,
+        attributes: [],
+        include: [{ model: Plan, as: 'plan', attributes: [], where: { ownerAccountId: accountId } }],
+      },
+    ],
+  })) as (PlanFile & { file: StoredFile }) | null;
+  return link && link.file;
 }
 
 function looksLike(bytes: Uint8Array, mediaType: string): boolean {

@@ -1,5 +1,13 @@
 import 'server-only';
-import { DeleteObjectCommand, GetObjectCommand, NoSuchKey, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
+import {
+  DeleteObjectCommand,
+  GetObjectCommand,
+  HeadObjectCommand,
+  NoSuchKey,
+  NotFound,
+  PutObjectCommand,
+  S3Client,
+} from '@aws-sdk/client-s3';
 import type { FileStore } from './file-store';
 
 export interface BucketSettings {
@@ -19,6 +27,8 @@ export function bucketStore({ bucket, region, endpoint, accessKeyId, secretAcces
     // The SDK's default trailing checksums are not understood by every server of this protocol; hashes prove the bytes.
     requestChecksumCalculation: 'WHEN_REQUIRED',
     responseChecksumValidation: 'WHEN_REQUIRED',
+    // A bucket that does not answer must not hold a phone's upload for ever: the phone tries again.
+    requestHandler: { connectionTimeout: 5_000, requestTimeout: 60_000, throwOnRequestTimeout: true },
     credentials: accessKeyId && secretAccessKey ? { accessKeyId, secretAccessKey } : undefined,
   });
   const key = (fileId: string) => `files/${fileId}`;
@@ -35,6 +45,15 @@ export function bucketStore({ bucket, region, endpoint, accessKeyId, secretAcces
         return Body ? Buffer.from(await Body.transformToByteArray()) : null;
       } catch (error) {
         if (error instanceof NoSuchKey) return null;
+        throw error;
+      }
+    },
+    has: async (fileId) => {
+      try {
+        await client.send(new HeadObjectCommand({ Bucket: bucket, Key: key(fileId) }));
+        return true;
+      } catch (error) {
+        if (error instanceof NotFound) return false;
         throw error;
       }
     },

@@ -10,6 +10,7 @@ export function databaseStore({ FileBytes }: Pick<Models, 'FileBytes'>): FileSto
       await FileBytes.bulkCreate([{ fileId, content: Buffer.from(content) }], { ignoreDuplicates: true });
     },
     get: async (fileId) => (await FileBytes.findByPk(fileId))?.content ?? null,
+    has: async (fileId) => (await FileBytes.count({ where: { fileId } })) > 0,
     remove: async (fileId) => {
       await FileBytes.destroy({ where: { fileId } });
     },

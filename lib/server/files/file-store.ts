@@ -7,5 +7,7 @@ export interface FileStore {
   put: (fileId: string, content: Uint8Array, mediaType: string) => Promise<void>;
   /** The bytes, or null where there are none. */
   get: (fileId: string) => Promise<Buffer | null>;
+  /** Whether the bytes are there, without reading them. */
+  has: (fileId: string) => Promise<boolean>;
   remove: (fileId: string) => Promise<void>;
 }

@@ -7,33 +7,30 @@ import { bucketStore } from './bucket-store';
 import { databaseStore } from './database-store';
 import type { FileStore } from './file-store';
 
-const stores = new Map<FileStore['kind'], FileStore>();
+let bucket: FileStore | undefined;
 
 /** The store of a kind; the bucket's only where one is configured. */
-export function storeOf(kind: FileStore['kind']): FileStore {
-  const known = stores.get(kind);
-  if (known) return known;
+function storeOf(kind: FileStore['kind']): FileStore {
+  return kind === 'bucket' ? (bucket ??= openBucket()) : databaseStore(db().models);
+}
+
+function openBucket(): FileStore {
   const { S3_BUCKET, S3_REGION, S3_ENDPOINT, S3_ACCESS_KEY_ID, S3_SECRET_ACCESS_KEY } = env();
-  if (kind === 'bucket' && !S3_BUCKET) throw new Error('A file is in a bucket, and S3_BUCKET is not set.');
-  const store =
-    kind === 'bucket'
-      ? bucketStore({
-          bucket: S3_BUCKET!,
-          region: S3_REGION,
-          endpoint: S3_ENDPOINT,
-          accessKeyId: S3_ACCESS_KEY_ID,
-          secretAccessKey: S3_SECRET_ACCESS_KEY,
-        })
-      : { ...databaseStore(db().models) };
-  if (kind === 'bucket') stores.set(kind, store);
-  return store;
+  if (!S3_BUCKET) throw new Error('A file is in a bucket, and S3_BUCKET is not set.');
+  return bucketStore({
+    bucket: S3_BUCKET,
+    region: S3_REGION,
+    endpoint: S3_ENDPOINT,
+    accessKeyId: S3_ACCESS_KEY_ID,
+    secretAccessKey: S3_SECRET_ACCESS_KEY,
+  });
 }
 
 export const sha256 = (content: Uint8Array): string => createHash('sha256').update(content).digest('hex');
 
 /**
- * Keeps bytes once, whoever brings them: the same content has one row. Bytes are kept before the row says so, and a row
- * whose bytes are missing gets them again.
+ * Keeps bytes once, whoever brings them: the same content has one row, in the store that was chosen when it first came.
+ * The row is first, since it names the bytes; where those are missing, the same content puts them there.
  */
 export async function storeFile(
   content: Uint8Array,
@@ -57,7 +54,18 @@ export async function storeFile(
   return row;
 }
 
-/** Bytes of a stored file; null where the store has lost them. */
-export async function readFile(row: StoredFile): Promise<Buffer | null> {
-  return storeOf(row.storage).get(row.id);
+/**
+ * Bytes of a stored file.
+ *
+ * @throws Error where the store has lost them
+ */
+export async function readFile(row: StoredFile): Promise<Buffer> {
+  const content = await storeOf(row.storage).get(row.id);
+  if (!content) throw new Error(`the bytes of file ${row.id} are gone from its store, the ${row.storage}`);
+  return content;
+}
+
+/** Whether the store still has the bytes of a file. */
+export function isKept(row: StoredFile): Promise<boolean> {
+  return storeOf(row.storage).has(row.id);
 }

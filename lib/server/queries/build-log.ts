@@ -2,8 +2,8 @@ import 'server-only';
 import type { StandingEntry } from '@/lib/domain/build/entry';
 import { db } from '../db';
 
-/** Newest entries that the desk shows of one build; what is older is in the file that the bench can export. */
-export const MOST_SHOWN = 2_000;
+/** Newest entries that the desk shows of one build. */
+const MOST_SHOWN = 2_000;
 
 /** The log of a build, newest entries last. */
 export async function readBuildLog(buildId: string): Promise<StandingEntry[]> {

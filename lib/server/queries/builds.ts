@@ -74,11 +74,24 @@ async function readLastEntryAt(build: Build): Promise<string | null> {
   return row?.receivedAt.toISOString() ?? null;
 }
 
-/** Crew of a build with names, present members only. */
+const places: readonly CrewRole[] = ['owner', 'helper', 'onlooker'];
+
+/** Crew of a build with names, present members only: the owner, then helpers, then onlookers, each as they joined. */
 export async function listCrew(buildId: string): Promise<{ accountId: string; name: string; role: CrewRole }[]> {
+  const { CrewMember } = db().models;
+  const [members, names] = await Promise.all([
+    CrewMember.findAll({ where: { buildId, removedAt: null }, order: [['joinedAt', 'ASC']] }),
+    readCrewNames(buildId),
+  ]);
+  return members
+    .sort((a, b) => places.indexOf(a.role) - places.indexOf(b.role))
+    .map(({ accountId, role }) => ({ accountId, role, name: names[accountId]! }));
+}
+
+/** Names of everyone who is or was of a build's crew, by account: what a removed member did keeps their name. */
+export async function readCrewNames(buildId: string): Promise<Record<string, string>> {
   const { CrewMember, Account } = db().models;
-  const members = await CrewMember.findAll({ where: { buildId, removedAt: null }, order: [['joinedAt', 'ASC']] });
+  const members = await CrewMember.findAll({ where: { buildId }, attributes: ['accountId'] });
   const accounts = await Account.findAll({ where: { id: members.map(({ accountId }) => accountId) } });
-  const names = new Map(accounts.map(({ id, name }) => [id, name]));
-  return members.map(({ accountId, role }) => ({ accountId, role, name: names.get(accountId)! }));
+  return Object.fromEntries(accounts.map(({ id, name }) => [id, name]));
 }

@@ -2,7 +2,7 @@ import 'server-only';
 import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
 import { QueryTypes, type Transaction } from 'sequelize';
-import { storable } from '@/lib/domain/build/storable-text';
+import { storable } from '@/lib/domain/storable-text';
 import { db } from '../db';
 
 /** What the log holds of an entry, as far as a repeat is judged by it (S2). */

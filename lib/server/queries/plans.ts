@@ -67,9 +67,7 @@ export async function exportRevision(revision: PlanRevision): Promise<PlanDocume
   const contents = new Map<string, string>();
   for (const { attachmentId, fileId } of links) {
     const file = await StoredFile.findByPk(fileId, { rejectOnEmpty: true });
-    const bytes = await readFile(file);
-    if (!bytes) throw new Error(`the bytes of file ${fileId} are gone from its store`);
-    contents.set(attachmentId, bytes.toString('base64'));
+    contents.set(attachmentId, (await readFile(file)).toString('base64'));
   }
   const { document } = revision;
   return {

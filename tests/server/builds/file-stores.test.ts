@@ -74,6 +74,8 @@ describe.each(['database', 'bucket'] as const)('bytes in the %s', (kind) => {
     await stores[kind]().put(id, Buffer.from('near'), 'image/png');
     const near = `${id.slice(0, -1)}${id.endsWith('0') ? '1' : '0'}`;
     expect(await stores[kind]().get(near)).toBeNull();
+    expect(await stores[kind]().has(near)).toBe(false);
+    expect(await stores[kind]().has(id)).toBe(true);
   });
 
   it('that were removed are gone', async () => {

@@ -1,5 +1,5 @@
 import { MAX_PLAN_BYTES } from '@/lib/domain/plan/document';
-import { importPlan } from '@/lib/server/commands/import-plan';
+import { importPlanFile } from '@/lib/server/commands/import-plan';
 import { route } from '@/lib/server/route';
 
 /**
@@ -8,5 +8,5 @@ import { route } from '@/lib/server/route';
  */
 export const POST = route(
   { auth: 'member', kind: 'bytes', mediaTypes: ['application/json'], maxBytes: MAX_PLAN_BYTES },
-  ({ account, bytes }) => importPlan(account, new TextDecoder().decode(bytes)),
+  ({ account, bytes }) => importPlanFile(account, bytes),
 );

@@ -8,7 +8,7 @@ import { linkLook } from '@/components/ui/link-look';
 import { requireSession } from '@/lib/server/auth/current-account';
 import { mayOnBuild } from '@/lib/server/policies/build';
 import { readBuildLog } from '@/lib/server/queries/build-log';
-import { findBuild, listCrew } from '@/lib/server/queries/builds';
+import { findBuild, listCrew, readCrewNames } from '@/lib/server/queries/builds';
 import { roleOnBuild } from '@/lib/server/queries/crew';
 
 export const metadata: Metadata = { title: 'Build' };
@@ -20,10 +20,9 @@ export default async function BuildPage({ params }: { params: Promise<{ buildId:
   const role = await roleOnBuild(buildId, account.id);
   const found = mayOnBuild('read', role).ok && (await findBuild(buildId));
   if (!found) notFound();
-  const [entries, crew] = await Promise.all([readBuildLog(buildId), listCrew(buildId)]);
-  const names = Object.fromEntries(crew.map((member) => [member.accountId, member.name]));
+  const [entries, crew, names] = await Promise.all([readBuildLog(buildId), listCrew(buildId), readCrewNames(buildId)]);
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-1 gap-8">
       <Refresh />
       <div className="flex flex-wrap items-end justify-between gap-4">
         <div>
@@ -36,8 +35,14 @@ export default async function BuildPage({ params }: { params: Promise<{ buildId:
         </a>
       </div>
       <BuildFacts plan={found.plan} state={found.state} openedAt={found.readAt} />
-      <section className="grid gap-4 border-t-2 border-iron pt-6">
+      <section className="grid grid-cols-1 gap-4 border-t-2 border-iron pt-6">
         <h2 className="text-2xl">Build log</h2>
+        {entries.length < found.build.lastPosition && (
+          <p className="text-lg">
+            The newest {entries.length} of {found.build.lastPosition} entries. The whole log is on the phones that have
+            this build at the bench.
+          </p>
+        )}
         <BuildLog buildId={buildId} entries={entries} plan={found.plan} names={names} />
       </section>
     </div>

@@ -13,5 +13,5 @@ export const PUT = route(
 
 export const GET = route(
   { auth: 'member', params: buildFileParams, policy: onBuild('read-photo') },
-  async ({ params }) => fileResponse(await findPhotoFile(params.buildId, params.sha256)),
+  async ({ params, request }) => fileResponse(request, await findPhotoFile(params.buildId, params.sha256)),
 );

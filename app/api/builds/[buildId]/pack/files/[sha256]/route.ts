@@ -7,5 +7,5 @@ import { route } from '@/lib/server/route';
 /** A drawing or other attachment of a build's plan. */
 export const GET = route(
   { auth: 'member', params: buildFileParams, policy: onBuild('take-to-bench') },
-  async ({ params }) => fileResponse(await findPackFile(params.buildId, params.sha256)),
+  async ({ params, request }) => fileResponse(request, await findPackFile(params.buildId, params.sha256)),
 );
