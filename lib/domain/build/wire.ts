@@ -19,8 +19,8 @@ export const logPushSchema = z.strictObject({
   accountId: z.uuid(),
   /** Last position this phone holds. */
   cursor: z.int().min(0),
-  /** Phone's clock when the request left. */
-  sentAt: z.number(),
+  /** Phone's clock when the request left; within what a clock can show, so that every stamp can be kept. */
+  sentAt: z.number().min(-8.64e15).max(8.64e15),
   entries: z.array(looseEntrySchema).max(MAX_BATCH_ENTRIES),
 });
 export type LogPush = z.infer<typeof logPushSchema>;

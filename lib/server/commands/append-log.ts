@@ -13,6 +13,9 @@ import { placeInCrew } from '../queries/crew';
 import { entryHash, findKnownEntries, greatestStampUpTo, lastStampOf } from '../queries/known-entries';
 import { readLogPage } from '../queries/log-page';
 
+/** Greatest number that a column of positions holds. */
+const GREATEST_POSITION = 2_147_483_647;
+
 interface Judged {
   accepted: LogAnswer['accepted'];
   refused: LogAnswer['refused'];
@@ -83,6 +86,13 @@ async function append(
       continue;
     }
     const { entry } = read;
+    if (entry.seen > GREATEST_POSITION || entry.id !== entry.id.toLowerCase()) {
+      refuse(
+        'malformed',
+        'The entry is not written as a phone writes it: its id in capitals, or more seen than there is.',
+      );
+      continue;
+    }
     const contentHash = entryHash(raw);
     const stored = known.get(entry.id);
     if (stored) {
