@@ -40,3 +40,21 @@ export function entry<K extends EntryKind>(
   if (!read.ok) throw new Error(read.message);
   return { ...(read.entry as LogEntryOf<K>), accountId: ACCOUNT, stamp, position } as unknown as StandingEntry;
 }
+
+/** Ticks of steps, in this order. */
+export function done(...stepIds: string[]): StandingEntry[] {
+  return stepIds.map((stepId) => entry('step-marked', { stepId }, { mark: 'done' }));
+}
+
+type TimerEvent = EntryTarget<'timer-marked'>['event'];
+
+/** A glue timer of a step with the times (ms) of what was told to it. */
+export function gluing(
+  stepId: string,
+  times: Partial<Record<TimerEvent, number>>,
+  { timerId = uuidOf(0x70), temperatureC = null }: { timerId?: string; temperatureC?: number | null } = {},
+): StandingEntry[] {
+  return (Object.entries(times) as [TimerEvent, number][]).map(([event, at]) =>
+    entry('timer-marked', { timerId, event }, { stepId, at, temperatureC }),
+  );
+}

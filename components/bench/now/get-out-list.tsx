@@ -1,5 +1,5 @@
 'use client';
-import type { GetOut } from '@/lib/domain/build/what-now';
+import type { GetOut } from '@/lib/domain/build/get-out';
 import type { ReactNode } from 'react';
 
 /** What to get out before starting, so that nothing is looked for with glue on the hands. */

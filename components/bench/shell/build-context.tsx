@@ -9,7 +9,7 @@ import { resolveKeySizes, type KeySizeValues } from '@/lib/domain/plan/key-sizes
 import { resolveParts, type ResolvedPart } from '@/lib/domain/plan/resolve-parts';
 import { getBuild, getPlan } from '@/lib/store/queries/builds';
 import type { BuildRow } from '@/lib/store/rows';
-import { clockTime } from '../entry/time-words';
+import { dayAndTime } from '../entry/time-words';
 import { useClock } from '../entry/use-clock';
 import { useBench } from './bench-context';
 import { BlankBench } from './blank-bench';
@@ -53,7 +53,7 @@ export function BuildProvider({ buildId, children }: { buildId: string; children
   const clock = useClock(JUDGE_EVERY_MS);
   const sizes = useMemo(() => (plan && build ? sizesOf(plan, build.state) : null), [plan, build]);
   const now = useMemo(
-    () => (plan && build ? whatNow(plan, build.state, clock, { formatTime: clockTime }) : null),
+    () => (plan && build ? whatNow(plan, build.state, clock, { formatTime: (ms) => dayAndTime(ms, clock) }) : null),
     [plan, build, clock],
   );
   const value = useMemo(

@@ -1,5 +1,5 @@
 'use client';
-import { getOut } from '@/lib/domain/build/what-now';
+import { getOut } from '@/lib/domain/build/get-out';
 import type { PlanStep } from '@/lib/domain/plan/document';
 import { minutesWords } from '../entry/time-words';
 import { useBuild } from '../shell/build-context';

@@ -6,7 +6,8 @@ import type { TimerView } from '@/lib/domain/glue/timer-view';
 import type { PlanStep } from '@/lib/domain/plan/document';
 import { stepNumber } from '@/lib/domain/plan/find';
 import { Button } from '@/components/ui/button';
-import { clockTime } from '../entry/time-words';
+import { dayAndTime } from '../entry/time-words';
+import { useClock } from '../entry/use-clock';
 import { goTo } from '../shell/address';
 import { useActs } from '../shell/act-context';
 import { useBuild } from '../shell/build-context';
@@ -99,6 +100,7 @@ function WaitPlate({
   onlyTime: boolean;
   onAskPast: () => void;
 }) {
+  const clock = useClock(60_000);
   const first = locks[0]!;
   const latest = Math.max(...locks.map(({ until }) => until?.latest ?? 0));
   return (
@@ -108,7 +110,7 @@ function WaitPlate({
       className="min-h-32! w-full rounded-plate border-2 border-amber bg-amber-ground px-5 text-left text-on-amber active:brightness-90"
     >
       <span className="block text-[1.625rem] leading-tight font-semibold">
-        {onlyTime ? `Not yet: till about ${clockTime(latest)}` : first.words}
+        {onlyTime ? `Not yet: till about ${dayAndTime(latest, clock)}` : first.words}
       </span>
       <span className="mt-1 block text-[1.125rem]">
         {onlyTime ? first.words : locks.length > 1 ? `and ${locks.length - 1} more. ` : ''}

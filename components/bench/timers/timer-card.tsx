@@ -87,6 +87,11 @@ export function TimerCard({ timer, foremost }: TimerCardProps) {
           </p>
         </div>
       )}
+      {timer.pressBy && (
+        <p className="figures">
+          Clamps tight by {clockTime(timer.pressBy.earliest)}, {clockTime(timer.pressBy.latest)} at the very last.
+        </p>
+      )}
       {!windows.known && <Notice tone="wait">{windows.message}</Notice>}
       {windows.known && windows.temperature === 'too-cold' && (
         <Notice tone="danger" title="Too cold.">

@@ -2,14 +2,20 @@ import type { FormattedLength } from '../measure';
 import { findPart, findStep, stepNumber } from '../plan/find';
 import type { PlanDocument } from '../plan/document';
 import type { LogEntry } from './entry';
+import { isKnown, toPresentShape } from './present-shape';
 
 export interface DescribeOptions {
   /** Formats a length in the person's own units. */
   formatLength: (length: number) => Pick<FormattedLength, 'text'>;
 }
 
-/** What an entry says, in plain words of the trade: "Step 14, Cut the four half laps, ticked". */
-export function describeEntry(entry: LogEntry, plan: PlanDocument, { formatLength }: DescribeOptions): string {
+/**
+ * What an entry says, in plain words of the trade: "Step 14, Cut the four half laps, ticked". An entry of a later
+ * program says so.
+ */
+export function describeEntry(raw: LogEntry, plan: PlanDocument, { formatLength }: DescribeOptions): string {
+  if (!isKnown(raw)) return 'An entry of a newer version of Holdfast';
+  const entry = toPresentShape(raw);
   const step = (id: string | null | undefined) => {
     const found = id ? findStep(plan, id) : undefined;
     return found ? `Step ${stepNumber(plan, found.id)}, ${found.title}` : 'A step of another revision';
@@ -30,11 +36,12 @@ export function describeEntry(entry: LogEntry, plan: PlanDocument, { formatLengt
       return `${name}${of}, ${entry.value.mark === 'cut' ? 'cut' : 'not cut after all'}`;
     }
     case 'timer-marked':
-      return `${timerWords[entry.target.event]}, ${step(entry.value.stepId).toLowerCase()}`;
+      return `${timerWords[entry.target.event]}, ${step(entry.value.stepId).replace(/^[SA]/, (first) => first.toLowerCase())}`;
     case 'key-size-set': {
       const size = plan.keySizes.find(({ id }) => id === entry.target.keySizeId);
       const { length } = entry.value;
-      return `${size?.name ?? entry.target.keySizeId} ${length === null ? 'set back to the plan' : `taken as ${formatLength(length).text}`}`;
+      const where = entry.target.stockPiece === null ? '' : ` of ${entry.target.stockPiece}`;
+      return `${size?.name ?? entry.target.keySizeId}${where} ${length === null ? 'set back to the plan' : `taken as ${formatLength(length).text}`}`;
     }
     case 'measurement-taken':
       return `${entry.value.what}: ${formatLength(entry.value.length).text}${at(entry.value.stepId)}`;
@@ -42,8 +49,9 @@ export function describeEntry(entry: LogEntry, plan: PlanDocument, { formatLengt
       return `Measurement changed: ${entry.value.what}: ${formatLength(entry.value.length).text}`;
     case 'check-recorded': {
       const check = findStep(plan, entry.target.stepId)?.checks.find(({ id }) => id === entry.target.checkId);
-      const { verdict, reason } = entry.value;
-      return `Check ${check?.what ?? entry.target.checkId}: ${checkWords[verdict]}${reason ? `: ${reason}` : ''}`;
+      const { verdict, reason, readings } = entry.value;
+      const read = readings.map((length) => formatLength(length).text).join(' and ');
+      return `Check ${check?.what ?? entry.target.checkId}: ${read ? `${read}, ` : ''}${checkWords[verdict]}${reason ? `: ${reason}` : ''}`;
     }
     case 'note-written':
       return `${noteWords[entry.value.about]}${at(entry.value.stepId)}: ${entry.value.text}`;

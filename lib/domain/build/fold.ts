@@ -1,6 +1,6 @@
 import type { StandingEntry } from './entry';
 import { compareStanding } from './entry';
-import { entryVersion } from './entry-versions';
+import { isKnown, presentShapes, toPresentShape, type EntryShapes } from './present-shape';
 import type { BuildState, Claim, CollectionItem } from './state';
 
 /** State of a build with no entries. Keys come from entries, so every record is without a prototype. */
@@ -30,19 +30,27 @@ export function emptyState(): BuildState {
  * Idempotent and independent of the order and number of times in which entries arrive: only their standing
  * (stamp, position, id) orders them.
  */
-export function foldEntries(entries: readonly StandingEntry[]): BuildState {
-  return applyEntries(emptyState(), entries);
+export function foldEntries(entries: readonly StandingEntry[], shapes: EntryShapes = presentShapes): BuildState {
+  return applyEntries(emptyState(), entries, shapes);
 }
 
 /**
  * State after some more entries. The given state is left as it was; parts that do not change are shared with it.
  *
- * An entry already in the state is replaced when its standing is now the server's (position not null), and left alone
- * otherwise, so a late echo of an estimate cannot unsettle what the server has ordered.
+ * An entry already in the state is replaced when its standing is now the server's (position not null), so a late echo of
+ * an estimate cannot unsettle what the server has ordered. An older version is brought to the present shape; what this
+ * program does not know is parked, and counts as soon as one that knows it is given the entry again (S6). After a
+ * restore of the server positions are given anew: then fold all entries afresh.
+ *
+ * @param shapes  kinds and versions known; those of this program unless a test says otherwise
  */
-export function applyEntries(state: BuildState, entries: readonly StandingEntry[]): BuildState {
+export function applyEntries(
+  state: BuildState,
+  entries: readonly StandingEntry[],
+  shapes: EntryShapes = presentShapes,
+): BuildState {
   if (entries.length === 0) return state;
-  const draft = new Draft(state);
+  const draft = new Draft(state, shapes);
   for (const entry of entries) draft.take(entry);
   return draft.state;
 }
@@ -56,12 +64,17 @@ class Draft {
   readonly state: Records;
   private readonly copied = new Set<object>();
 
-  constructor(from: BuildState) {
+  constructor(
+    from: BuildState,
+    private readonly shapes: EntryShapes,
+  ) {
     this.state = { ...from };
   }
 
-  take(entry: StandingEntry): void {
-    if (entry.v > (entryVersion(entry.kind) ?? 0)) return this.park(entry);
+  take(raw: StandingEntry): void {
+    if (!isKnown(raw, this.shapes)) return this.park(raw);
+    if (Object.hasOwn(this.state.parked, raw.id)) delete this.record('parked')[raw.id];
+    const entry = toPresentShape(raw, this.shapes);
     switch (entry.kind) {
       case 'step-marked':
         return this.claim('steps', entry.target.stepId, entry);
@@ -133,12 +146,8 @@ class Draft {
     this.record('parked')[entry.id] = { entryId: entry.id, kind: entry.kind, v: entry.v };
   }
 
-  /** Puts the entry's claim in its place by standing; replaces its own earlier claim when the server has settled it. */
+  /** Puts the entry's claim in its place by standing; replaces its own earlier claim when this standing is better. */
   private insert(claims: Claim<unknown>[], entry: StandingEntry): Claim<unknown>[] {
-    const known = claims.findIndex((claim) => claim.entryId === entry.id);
-    if (known >= 0 && (entry.position === null || claims[known]!.position !== null)) return claims;
-    const owned = this.own(claims, (list) => [...list]);
-    if (known >= 0) owned.splice(known, 1);
     const claim: Claim<unknown> = {
       entryId: entry.id,
       stamp: entry.stamp,
@@ -148,11 +157,34 @@ class Draft {
       deviceId: entry.deviceId,
       value: entry.value,
     };
-    let at = owned.length;
-    while (at > 0 && compareClaims(owned[at - 1]!, claim) > 0) at -= 1;
-    owned.splice(at, 0, claim);
+    const known = claims.findLastIndex(({ entryId }) => entryId === entry.id);
+    if (known >= 0 && !isBetter(claim, claims[known]!)) return claims;
+    const owned = this.own(claims, (list) => [...list]);
+    if (known >= 0) owned.splice(known, 1);
+    owned.splice(placeOf(owned, claim), 0, claim);
     return owned;
   }
+}
+
+/**
+ * Which of two standings of one entry counts, whichever came first: the server's over an estimate, the later of two
+ * alike.
+ */
+function isBetter(claim: Claim<unknown>, known: Claim<unknown>): boolean {
+  const [settled, wasSettled] = [claim.position !== null, known.position !== null];
+  return settled === wasSettled ? compareClaims(claim, known) > 0 : settled;
+}
+
+/** Index at which a claim stands among claims in order; nearly always the end, so that is asked first. */
+function placeOf(claims: readonly Claim<unknown>[], claim: Claim<unknown>): number {
+  let [low, high] = [0, claims.length];
+  if (high === 0 || compareClaims(claims[high - 1]!, claim) < 0) return high;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (compareClaims(claims[middle]!, claim) < 0) low = middle + 1;
+    else high = middle;
+  }
+  return low;
 }
 
 function compareClaims(a: Claim<unknown>, b: Claim<unknown>): number {

@@ -42,7 +42,8 @@ export function judgeCheck(
   const target = evaluateSize(judge.target, values, plan);
   if (!target.ok) return { verdict: 'incomplete', words: `The plan gives no size to check against: ${target.message}` };
   const off = reading - target.length;
-  if (off > judge.plus) return { verdict: 'outside', off, words: 'Too large' };
-  if (-off > judge.minus) return { verdict: 'outside', off, words: 'Too small' };
-  return { verdict: 'within', off, words: 'Within the tolerance' };
+  const drawn = target.estimate ? ', held against the size as drawn: measure that from the work first' : '';
+  if (off > judge.plus) return { verdict: 'outside', off, words: `Too large${drawn}` };
+  if (-off > judge.minus) return { verdict: 'outside', off, words: `Too small${drawn}` };
+  return { verdict: 'within', off, words: `Within the tolerance${drawn}` };
 }

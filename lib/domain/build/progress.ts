@@ -1,5 +1,6 @@
 import type { PlanDocument } from '../plan/document';
 import type { BuildState } from './state';
+import { openMinutes } from './session-minutes';
 import { pieceMark, sessionsOf, stepMark } from './views';
 
 export interface Progress {
@@ -8,7 +9,7 @@ export interface Progress {
   stepsInAll: number;
   piecesCut: number;
   piecesInAll: number;
-  /** Minutes of closed sessions, and of the open one up to now. */
+  /** Minutes of closed sessions, and of open ones as {@link openMinutes} counts them. */
   minutesWorked: number;
   /** Hands-on minutes of the steps still open, from the quickest to the slowest builder. */
   minutesLeft: { min: number; max: number };
@@ -32,8 +33,7 @@ export function progressOf(plan: PlanDocument, state: BuildState, now: number): 
     piecesInAll: sum(cutParts.map(({ quantity }) => quantity)),
     minutesWorked: sum(
       sessionsOf(state).map(
-        ({ openedAt, minutes }) =>
-          minutes ?? (openedAt === null ? 0 : Math.max(0, Math.round((now - openedAt) / 60_000))),
+        ({ openedAt, minutes }) => minutes ?? (openedAt === null ? 0 : openMinutes(state, openedAt, now)),
       ),
     ),
     minutesLeft: { min: sum(left.map(({ min }) => min)), max: sum(left.map(({ max }) => max)) },

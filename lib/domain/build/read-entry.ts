@@ -1,8 +1,8 @@
 import { z } from 'zod';
 import type { LogEntry } from './entry';
-import { entryVersion } from './entry-versions';
 import { entryKinds, MAX_NOTE_CHARACTERS, type EntryKind } from './kinds';
-import { entryMigrations, migrateParts, type EntryMigrations } from './migrate-entry';
+import { migrateParts } from './migrate-entry';
+import { presentShapes, type EntryShapes } from './present-shape';
 import { storable } from '../storable-text';
 import type { RefusalCode } from './wire';
 
@@ -27,7 +27,7 @@ const frameSchema = z.object({
  * Judges one entry as it came over the wire or out of a file, and brings an older version of its kind to today's shape.
  * The same judgement runs on the phone before an entry is written and on the server when it arrives.
  */
-export function readEntry(raw: unknown, migrations: EntryMigrations = entryMigrations): ReadEntryResult {
+export function readEntry(raw: unknown, shapes: EntryShapes = presentShapes): ReadEntryResult {
   if (sizeOf(raw) > MAX_ENTRY_SIZE) {
     return refuse(
       'too-large',
@@ -37,7 +37,7 @@ export function readEntry(raw: unknown, migrations: EntryMigrations = entryMigra
   const frame = frameSchema.safeParse(raw);
   if (!frame.success) return refuse('malformed', `The entry is not complete: ${firstProblem(frame.error)}.`);
 
-  const known = entryVersion(frame.data.kind);
+  const known = shapes.versionOf(frame.data.kind);
   if (known === undefined) {
     return refuse('unknown-kind', `This version does not know entries of the kind "${frame.data.kind}".`);
   }
@@ -50,7 +50,7 @@ export function readEntry(raw: unknown, migrations: EntryMigrations = entryMigra
     { target: frame.data.target, value: frame.data.value },
     frame.data.v,
     known,
-    migrations,
+    shapes.migrations,
   );
   const target = entryKinds[kind].target.safeParse(parts.target);
   if (!target.success) return refuse('malformed', `${kind}: ${firstProblem(target.error)}.`);

@@ -17,7 +17,8 @@ export interface DepartureSubject {
 
 /**
  * Later steps, parts and hardware that a departure touches: parts whose sizes follow from the key sizes, parts made from
- * those parts, and steps that come after and use any of them or wait for the step itself.
+ * those parts, and steps that come after and use or make any of them, check a size that follows, or wait for the step
+ * itself.
  */
 export function touchesOf(plan: PlanDocument, { stepId, partIds = [], keySizeIds = [] }: DepartureSubject): Touches {
   const sizes = grow(
@@ -43,6 +44,8 @@ export function touchesOf(plan: PlanDocument, { stepId, partIds = [], keySizeIds
       step.id !== stepId &&
       later(step.id) &&
       (step.uses.some(({ part }) => parts.has(part)) ||
+        step.makes.some((part) => parts.has(part)) ||
+        step.checks.some(({ judge }) => judge.kind === 'length' && namesOf(judge.target).some((id) => sizes.has(id))) ||
         (stepId !== null &&
           stepId !== undefined &&
           step.after.some((after) => (typeof after === 'string' ? after : after.step) === stepId))),

@@ -1,4 +1,5 @@
 import { compareStanding, type StandingEntry } from './entry';
+import { isKnown, toPresentShape } from './present-shape';
 
 /** Kinds that an undo button takes back: acts on the record, not undos themselves or the opening of a session. */
 const NOT_UNDOABLE: ReadonlySet<string> = new Set(['entry-undone', 'session-opened']);
@@ -11,7 +12,9 @@ export function isUndoable(entry: Pick<StandingEntry, 'kind'>): boolean {
 /** Ids of entries that are undone at present. */
 export function undoneIds(entries: readonly StandingEntry[]): Set<string> {
   const last = new Map<string, StandingEntry & { kind: 'entry-undone' }>();
-  for (const entry of entries) {
+  for (const raw of entries) {
+    if (!isKnown(raw)) continue;
+    const entry = toPresentShape(raw);
     if (entry.kind !== 'entry-undone') continue;
     const known = last.get(entry.target.entryId);
     if (!known || compareStanding(known, entry) < 0) last.set(entry.target.entryId, entry);

@@ -1,24 +1,17 @@
 import type { TimerView } from '../glue/timer-view';
 import type { PlanDocument, PlanStep } from '../plan/document';
 import { stepsBefore } from '../plan/step-order';
-import { stepStatuses, timerViews, type Lock, type LockOptions, type StepStatus } from './locks';
-import { pieceNumbers } from './progress';
+import { getOut, type GetOut } from './get-out';
+import { lastTouch } from './last-touch';
+import { stepStatuses, timerViews, windowsOf, type Lock, type LockOptions, type StepStatus } from './locks';
 import type { BuildState } from './state';
-import { pieceMark } from './views';
+import { stepClaim } from './views';
 
 export interface StepSuggestion {
   stepId: string;
   /** Why it is offered here, in words. */
   why: string;
   minutes: { min: number; max: number };
-}
-
-export interface GetOut {
-  tools: string[];
-  items: { id: string; item: string; quantity: number; unit: string }[];
-  parts: { partId: string; label: string; name: string; pieces: number; cut: number }[];
-  clamps: number;
-  people: number;
 }
 
 export interface WhatNow {
@@ -34,17 +27,27 @@ export interface WhatNow {
 }
 
 /**
- * What can be done now: ready steps with the reason for their place. Steps that start the longest wait come before
- * others of the same stage, since what cures meanwhile costs nothing; then the stage under way; then the plan's order.
+ * What can be done now: ready steps with the reason for their place. First the step that was touched last and is still
+ * open; then the stage under way before others; within a stage what starts a wait, the longest first, since what cures
+ * meanwhile costs nothing; then what follows from the last step; then the plan's order.
+ *
+ * @param now  ms since 1970
  */
 export function whatNow(plan: PlanDocument, state: BuildState, now: number, options: LockOptions = {}): WhatNow {
   const statuses = stepStatuses(plan, state, now, options);
-  const lastMarked = lastTouched(plan, statuses);
-  const stageHere = lastMarked?.stage ?? plan.steps[0]!.stage;
+  const last = lastPassed(plan, state, statuses);
+  const stageHere = (last ?? plan.steps[0]!).stage;
+  const underWay = lastTouch(plan, state)?.stepId;
   const ready = plan.steps.filter(({ id }) => statuses[id]!.state === 'ready');
   const ranked = ready
-    .map((step, order) => ({ step, order, ...judge(plan, step, stageHere, lastMarked) }))
-    .sort((a, b) => a.rank - b.rank || a.order - b.order);
+    .map((step, order) => ({
+      step,
+      order,
+      ...(step.id === underWay
+        ? { rank: 0, wait: 0, why: 'You were at this step' }
+        : judge(plan, step, stageHere, last)),
+    }))
+    .sort((a, b) => a.rank - b.rank || b.wait - a.wait || a.order - b.order);
   const here = ranked[0]?.step ?? null;
   return {
     here: here?.id ?? null,
@@ -63,48 +66,43 @@ export function whatNow(plan: PlanDocument, state: BuildState, now: number, opti
   };
 }
 
-/** What to get out for a step: tools, hardware, parts and how many of their pieces are cut. */
-export function getOut(plan: PlanDocument, state: BuildState, step: PlanStep): GetOut {
-  const items = [...plan.hardware, ...plan.supplies];
-  const tools = step.methods[0] ? [...new Set([...step.methods[0].tools, ...step.tools])] : step.tools;
-  return {
-    tools,
-    items: step.takes.flatMap(({ item, quantity }) => {
-      const found = items.find(({ id }) => id === item);
-      return found ? [{ id: item, item: found.item, quantity, unit: found.unit }] : [];
-    }),
-    parts: step.uses.flatMap(({ part, pieces }) => {
-      const found = plan.parts.find(({ id }) => id === part);
-      if (!found) return [];
-      const cut = pieceNumbers(found.quantity).filter((n) => pieceMark(state, part, n) === 'cut').length;
-      return [{ partId: part, label: found.label, name: found.name, pieces: pieces ?? found.quantity, cut }];
-    }),
-    clamps: Math.max(step.clamps, step.glueUp?.clamps.count ?? 0),
-    people: step.people,
-  };
-}
-
-function lastTouched(plan: PlanDocument, statuses: Record<string, StepStatus>): PlanStep | null {
+/** The step that was done or skipped last. */
+function lastPassed(plan: PlanDocument, state: BuildState, statuses: Record<string, StepStatus>): PlanStep | null {
   let last: PlanStep | null = null;
   let at = -Infinity;
   for (const step of plan.steps) {
-    const claim = statuses[step.id]!.claim;
-    if (claim && claim.madeAt >= at) [last, at] = [step, claim.madeAt];
+    const stamp = statuses[step.id]!.mark === 'open' ? undefined : stepClaim(state, step.id)?.stamp;
+    if (stamp !== undefined && stamp >= at) [last, at] = [step, stamp];
   }
   return last;
 }
 
-function judge(
-  plan: PlanDocument,
-  step: PlanStep,
-  stageHere: string,
-  last: PlanStep | null,
-): { rank: number; why: string } {
-  if (last && stepsBefore(step).includes(last.id)) return { rank: 0, why: 'Comes right after what you did last' };
-  if (step.glueUp) return { rank: 1, why: 'Starts a wait: it cures while you do something else' };
-  if (step.finish) return { rank: 2, why: 'Starts a wait: it dries while you do something else' };
+interface Judged {
+  rank: number;
+  /** Longest minutes of the wait that the step starts. */
+  wait: number;
+  why: string;
+}
+
+function judge(plan: PlanDocument, step: PlanStep, stageHere: string, last: PlanStep | null): Judged {
+  const isHere = step.stage === stageHere;
+  const rank = (within: number) => (isHere ? within : within + 3);
+  const wait = waitOf(plan, step);
+  if (wait !== null) {
+    const does = step.glueUp ? 'cures' : 'dries';
+    return { rank: rank(1), wait, why: `Starts a wait: it ${does} while you do something else` };
+  }
+  if (last && stepsBefore(step).includes(last.id))
+    return { rank: rank(2), wait: 0, why: 'Comes right after what you did last' };
   const stage = plan.stages.find(({ id }) => id === step.stage)?.name ?? '';
-  return step.stage === stageHere
-    ? { rank: 1, why: `Goes on with ${stage}` }
-    : { rank: 3, why: `Free now, in ${stage}` };
+  return { rank: rank(3), wait: 0, why: isHere ? `Goes on with ${stage}` : `Free now, in ${stage}` };
+}
+
+/** Longest minutes of the cure or drying that a step starts, 0 where it is unknown; null for a step that starts none. */
+function waitOf(plan: PlanDocument, step: PlanStep): number | null {
+  if (step.glueUp) {
+    const windows = windowsOf(plan, step.id, null);
+    return windows.known ? windows.cure.max : 0;
+  }
+  return step.finish?.recoatMin.max ?? null;
 }

@@ -44,9 +44,12 @@ function utc(ms: number): string {
   return new Date(ms).toISOString().replace(/[-:]|\.\d{3}/g, '');
 }
 
-/** TEXT, RFC 5545 section 3.3.11. */
+/** TEXT, RFC 5545 section 3.3.11; control characters, which it does not allow, become spaces. */
 function escapeText(text: string): string {
-  return text.replace(/[\\;,]/g, '\\$&').replace(/\r\n|\r|\n/g, '\\n');
+  return text
+    .replace(/[\\;,]/g, '\\$&')
+    .replace(/\r\n|\r|\n/g, '\\n')
+    .replace(/\p{Cc}/gu, ' ');
 }
 
 /** Lines of at most 75 octets, RFC 5545 section 3.1; a character is never cut in two. */

@@ -1,5 +1,5 @@
 import type { TimerTimes } from '../build/views';
-import type { GlueWindows } from './windows';
+import type { GlueWindows, Window } from './windows';
 
 export type TimerPhase = 'open' | 'in-clamps' | 'curing' | 'cured' | 'put-away';
 
@@ -22,29 +22,30 @@ export interface TimerView {
   clampsOffEarly: boolean;
   /** Full pressure came later than the longest assembly time. */
   pressedLate: boolean;
+  /** While the glue is open: by when full pressure must be on, cautiously and at the very last; null later or unknown. */
+  pressBy: { earliest: number; latest: number } | null;
 }
 
 const MINUTE = 60_000;
 
 /**
  * Phase of a timer at `now`: open from first glue to clamps on, in clamps until someone says they are off, curing until
- * the latest end of cure, then cured. Time alone never ends the first two: only a person does.
+ * the latest end of cure, then cured. Time alone never ends the first two: only a person does. Glue that went on colder
+ * than it may has no clamp or cure time at all, so it never counts as cured.
  */
 export function timerView(timer: TimerTimes, windows: GlueWindows, now: number): TimerView {
   const startedAt = timer.times['first-glue']!;
   const clampsOn = timer.times['clamps-on'];
   const clampsOff = timer.times['clamps-off'];
   const base = { timerId: timer.timerId, stepId: timer.stepId, startedAt };
+  const { open, assembly, clamp, cure } = rangesOf(windows);
   const early =
-    windows.known &&
-    clampsOn !== undefined &&
-    clampsOff !== undefined &&
-    clampsOff < clampsOn + windows.clamp.min * MINUTE;
-  const late = windows.known && clampsOn !== undefined && clampsOn > startedAt + windows.totalAssembly.max * MINUTE;
+    clamp !== null && clampsOn !== undefined && clampsOff !== undefined && clampsOff < clampsOn + clamp.min * MINUTE;
+  const late = assembly !== null && clampsOn !== undefined && clampsOn > startedAt + assembly.max * MINUTE;
   const view = (
     phase: TimerPhase,
     phaseStartedAt: number,
-    range: { min: number; max: number } | null,
+    range: Window | null,
     due: 'latest' | 'never',
   ): TimerView => {
     const earliest = range && phaseStartedAt + range.min * MINUTE;
@@ -61,11 +62,26 @@ export function timerView(timer: TimerTimes, windows: GlueWindows, now: number):
       overdueMs: overdue ? now - dueAt : 0,
       clampsOffEarly: early,
       pressedLate: late,
+      pressBy:
+        phase === 'open' && assembly !== null
+          ? { earliest: startedAt + assembly.min * MINUTE, latest: startedAt + assembly.max * MINUTE }
+          : null,
     };
   };
   if (timer.times['put-away'] !== undefined) return view('put-away', timer.times['put-away'], null, 'never');
-  if (clampsOn === undefined) return view('open', startedAt, windows.known ? windows.open : null, 'latest');
-  if (clampsOff === undefined) return view('in-clamps', clampsOn, windows.known ? windows.clamp : null, 'latest');
-  const curing = view('curing', clampsOn, windows.known ? windows.cure : null, 'never');
+  if (clampsOn === undefined) return view('open', startedAt, open, 'latest');
+  if (clampsOff === undefined) return view('in-clamps', clampsOn, clamp, 'latest');
+  const curing = view('curing', clampsOn, cure, 'never');
   return curing.latest !== null && now >= curing.latest ? { ...curing, phase: 'cured' } : curing;
+}
+
+function rangesOf(windows: GlueWindows): Record<'open' | 'assembly' | 'clamp' | 'cure', Window | null> {
+  if (!windows.known) return { open: null, assembly: null, clamp: null, cure: null };
+  const sets = windows.temperature !== 'too-cold';
+  return {
+    open: windows.open,
+    assembly: windows.totalAssembly,
+    clamp: sets ? windows.clamp : null,
+    cure: sets ? windows.cure : null,
+  };
 }

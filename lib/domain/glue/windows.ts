@@ -30,10 +30,10 @@ const TABLE_TEMPERATURE_C = 21;
 /**
  * Open, assembly, clamp and cure times of a plan's adhesive, in minutes.
  *
- * Figures of the label rule over those of the class. Correction goes one way only: below 21 °C the long end of clamp and
- * cure time grows by 2^((21 − T)/10), common practice (about half the speed for each 10 °C colder; from memory), above it
- * the short end of open time shrinks by the same rule; nothing ever gets better than the figure. Below the least
- * temperature the answer is `too-cold`: drying glues then fail instead of slowing, and no time is right.
+ * Figures of the label rule over those of the class. Correction goes one way only: below 21 °C clamp and cure time grow
+ * by 2^((21 − T)/10), common practice (about half the speed for each 10 °C colder; from memory), above it open and
+ * assembly time shrink by the same rule; nothing ever gets better than the figure. Below the least temperature the
+ * answer is `too-cold`: drying glues then fail instead of slowing, and no time is right.
  *
  * @param temperatureC  of the wood, °C, from −40 to 60, or null where nobody measured it
  */
@@ -86,17 +86,17 @@ export function glueWindows(adhesive: PlanAdhesive, { temperatureC }: { temperat
 }
 
 function corrected(window: Window, temperatureC: number, which: 'longer-when-cold' | 'shorter-when-warm'): Window {
+  const longer = which === 'longer-when-cold';
   const factor = 2 ** ((TABLE_TEMPERATURE_C - temperatureC) / 10);
-  const applies = which === 'longer-when-cold' ? factor > 1 : factor < 1;
-  if (!applies) return window;
-  const max = which === 'longer-when-cold' ? Math.ceil(window.max * factor) : window.max;
-  const min = which === 'shorter-when-warm' ? Math.floor(window.min * factor * 10) / 10 : window.min;
+  if (longer ? factor <= 1 : factor >= 1) return window;
+  // Rounded to the side that asks for more patience, or less dawdling.
+  const round = longer ? Math.ceil : (minutes: number) => Math.floor(minutes * 10) / 10;
   return {
-    min,
-    max,
+    min: round(window.min * factor),
+    max: round(window.max * factor),
     working: {
       ...window.working,
-      formula: `${which === 'longer-when-cold' ? 'long end' : 'short end'} × 2^((21 − T) ÷ 10); the other end as given`,
+      formula: 'the range × 2^((21 − T) ÷ 10)',
       inputs: { ...window.working.inputs, T: `${temperatureC} °C` },
       source: `${window.working.source} Temperature: common practice, from memory.`,
     },

@@ -2,79 +2,51 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { StandingEntry } from '@/lib/domain/build/entry';
 import { applyEntries, emptyState, foldEntries } from '@/lib/domain/build/fold';
-import { notesOf, photosOf, pieceMark, stepClaim, stepMark } from '@/lib/domain/build/views';
+import type { EntryParts } from '@/lib/domain/build/migrate-entry';
+import type { EntryShapes } from '@/lib/domain/build/present-shape';
+import type { BuildState } from '@/lib/domain/build/state';
+import { notesOf, photosOf, pieceMark, stepClaim, stepMark, timersOf } from '@/lib/domain/build/views';
+import { arrivals, history } from '../../support/history';
 import { entry, uuidOf } from '../../support/log';
 
 const step = (number: number) => ({ stepId: `step-${number}` });
 
-/** A random history: registers, collections, revisions and undos, stamps that tie, some entries still held. */
-const history = fc
-  .array(
-    fc.record({
-      act: fc.constantFrom('tick', 'skip', 'open', 'piece', 'note', 'revise', 'remove', 'undo', 'redo', 'timer'),
-      subject: fc.integer({ min: 1, max: 4 }),
-      stamp: fc.integer({ min: 1, max: 12 }),
-      held: fc.boolean(),
-    }),
-    { maxLength: 40 },
-  )
-  .map((acts) =>
-    acts.map(({ act, subject, stamp, held }, i): StandingEntry => {
-      const beside = { id: uuidOf(i + 1), stamp, madeAt: stamp, position: held ? null : i + 1 };
-      const itemId = uuidOf(0x900 + subject);
-      switch (act) {
-        case 'piece':
-          return entry(
-            'piece-marked',
-            { partId: 'side', piece: subject },
-            { mark: stamp % 2 ? 'cut' : 'open' },
-            beside,
-          );
-        case 'note':
-          return entry('note-written', { noteId: itemId }, { text: `note ${i}`, stepId: null }, beside);
-        case 'revise':
-          return entry('note-revised', { noteId: itemId }, { text: `revision ${i}` }, beside);
-        case 'remove':
-          return entry('item-removed', { collection: 'notes', itemId }, { removed: stamp % 2 === 0 }, beside);
-        case 'undo':
-          return entry('entry-undone', { entryId: uuidOf(subject) }, { undone: true }, beside);
-        case 'redo':
-          return entry('entry-undone', { entryId: uuidOf(subject) }, { undone: false }, beside);
-        case 'timer':
-          return entry(
-            'timer-marked',
-            { timerId: itemId, event: stamp % 2 ? 'first-glue' : 'clamps-on' },
-            { stepId: 'step-1', at: stamp },
-            beside,
-          );
-        default:
-          return entry(
-            'step-marked',
-            step(subject),
-            { mark: ({ tick: 'done', skip: 'skipped', open: 'open' } as const)[act as 'tick'] },
-            beside,
-          );
-      }
-    }),
-  );
+function foldInBatches(entries: readonly StandingEntry[], size: number) {
+  let state = emptyState();
+  for (let from = 0; from < entries.length; from += size) state = applyEntries(state, entries.slice(from, from + size));
+  return state;
+}
 
 const plain = (value: unknown) => JSON.parse(JSON.stringify(value)) as unknown;
 
 describe('the fold', () => {
-  it('S4: does not depend on the order in which entries arrive, nor on how they are cut into batches', () => {
+  it('S4: does not depend on order, repetition or batches of what arrives', () => {
     fc.assert(
-      fc.property(history, fc.integer(), fc.integer({ min: 1, max: 7 }), (entries, seed, size) => {
-        const shuffled = [...entries].sort(
-          (a, b) =>
-            Math.sin(seed + Number.parseInt(a.id.slice(-6), 16)) - Math.sin(seed + Number.parseInt(b.id.slice(-6), 16)),
-        );
-        let state = emptyState();
-        for (let from = 0; from < shuffled.length; from += size)
-          state = applyEntries(state, shuffled.slice(from, from + size));
-        expect(plain(state)).toEqual(plain(foldEntries(entries)));
+      fc.property(arrivals, ({ entries, order, size }) => {
+        expect(plain(foldInBatches(order, size))).toEqual(plain(foldEntries(entries)));
       }),
       { numRuns: 300 },
     );
+  });
+
+  it('S4: what the server has settled stands, whenever the estimates of it come', () => {
+    fc.assert(
+      fc.property(arrivals, fc.array(fc.integer({ min: 1, max: 12 })), ({ entries, order, size }, guesses) => {
+        const settle = (all: StandingEntry[]) =>
+          all.map((each) => ({ ...each, position: Number.parseInt(each.id.slice(-6), 16) }) as StandingEntry);
+        const estimates = order.map(
+          (each, i) => ({ ...each, position: null, stamp: guesses[i] ?? 3 }) as StandingEntry,
+        );
+        const mixed = settle(order).flatMap((each, i) => (i % 2 ? [each, estimates[i]!] : [estimates[i]!, each]));
+        expect(plain(foldInBatches(mixed, size))).toEqual(plain(foldEntries(settle(entries))));
+      }),
+    );
+  });
+
+  it('of two estimates of one entry the same one stands, whichever comes first', () => {
+    const early = entry('step-marked', step(1), { mark: 'done' }, { id: uuidOf(76), stamp: 5 });
+    const late = { ...early, stamp: 9 };
+    expect(plain(foldEntries([early, late]))).toEqual(plain(foldEntries([late, early])));
   });
 
   it('S2: an entry that arrives again changes nothing', () => {
@@ -111,13 +83,37 @@ describe('the fold', () => {
     }
   });
 
-  it('S6: a kind or version of a later program is parked and counts after the update', () => {
+  it('S6: a kind or version of a later program is parked, and counts when it is given again after the update', () => {
     const known = entry('step-marked', step(1), { mark: 'done' });
     const newer = { ...known, id: uuidOf(88), v: 99 };
     const unknown = { ...known, id: uuidOf(89), kind: 'moon-phase' } as unknown as StandingEntry;
     const state = foldEntries([newer, unknown]);
     expect(stepMark(state, 'step-1')).toBe('open');
     expect(Object.keys(state.parked)).toEqual([uuidOf(88), uuidOf(89)]);
+
+    const step98 = (parts: EntryParts) => parts;
+    const updated: EntryShapes = {
+      versionOf: (kind) => (kind === 'step-marked' ? 99 : undefined),
+      migrations: { 'step-marked': Array.from({ length: 98 }, () => step98) },
+    };
+    const after = applyEntries(state, [newer, unknown], updated);
+    expect(stepMark(after, 'step-1')).toBe('done');
+    expect(Object.keys(after.parked)).toEqual([uuidOf(89)]);
+    expect(plain(after)).toEqual(plain(foldEntries([unknown, newer], updated)));
+  });
+
+  it('S6: an entry of an older version counts in the shape of today', () => {
+    const old = {
+      ...entry('step-marked', step(1), { mark: 'done' }),
+      value: { ticked: true },
+    } as unknown as StandingEntry;
+    const shapes: EntryShapes = {
+      versionOf: (kind) => (kind === 'step-marked' ? 2 : undefined),
+      migrations: {
+        'step-marked': [({ target, value }) => ({ target, value: { mark: value['ticked'] ? 'done' : 'open' } })],
+      },
+    };
+    expect(stepMark(foldEntries([old], shapes), 'step-1')).toBe('done');
   });
 
   it('survives a trip through JSON', () => {
@@ -181,5 +177,27 @@ describe('what the fold says', () => {
       stepClaim(JSON.parse(JSON.stringify(emptyState())) as ReturnType<typeof emptyState>, 'constructor'),
     ).toBeUndefined();
     expect(pieceMark(state, 'valueof', 1)).toBe('open');
+  });
+
+  it('an id made to reach the language’s own objects reaches nothing', () => {
+    const evil = (kind: string, target: object, value: object) =>
+      ({ ...entry('step-marked', step(1), { mark: 'done' }), kind, target, value }) as unknown as StandingEntry;
+    const entries = [
+      evil('step-marked', { stepId: '__proto__' }, { mark: 'done', polluted: true }),
+      evil('timer-marked', { timerId: '__proto__', event: '__proto__' }, { stepId: 'a', at: 1 }),
+      evil('note-written', { noteId: '__proto__' }, { text: 'x', stepId: null, about: 'note' }),
+      { ...evil('moon-phase', {}, {}), id: '__proto__' } as StandingEntry,
+    ];
+    for (const from of [emptyState(), JSON.parse(JSON.stringify(emptyState())) as BuildState]) {
+      const state = applyEntries(from, entries);
+      expect(Object.keys(state.steps)).toEqual(['__proto__']);
+      expect(stepMark(state, '__proto__')).toBe('done');
+      expect(stepMark(JSON.parse(JSON.stringify(state)) as BuildState, '__proto__')).toBe('done');
+      expect(notesOf(state)).toHaveLength(1);
+      expect(timersOf(state)).toEqual([]);
+      expect(stepMark(state, 'toString')).toBe('open');
+    }
+    expect(Object.keys(Object.prototype)).toEqual([]);
+    expect(({} as { polluted?: boolean; mark?: string }).polluted).toBeUndefined();
   });
 });

@@ -1,8 +1,10 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { entryVersion } from '@/lib/domain/build/entry-versions';
 import { entryKinds, MAX_NOTE_CHARACTERS } from '@/lib/domain/build/kinds';
 import { migrateParts } from '@/lib/domain/build/migrate-entry';
-import { readEntry } from '@/lib/domain/build/read-entry';
+import type { EntryShapes } from '@/lib/domain/build/present-shape';
+import { MAX_ENTRY_SIZE, readEntry } from '@/lib/domain/build/read-entry';
 import { assignStamp, estimateStamp } from '@/lib/domain/build/stamp';
 import { BUILD, PHONE, uuidOf } from '../../support/log';
 
@@ -62,20 +64,41 @@ describe('readEntry', () => {
     expect(result.ok ? '' : result.message).toContain(String(MAX_NOTE_CHARACTERS));
   });
 
-  it('S6: brings an older version to the present shape, step by step', () => {
-    const migrations = {
-      'made-up': [
-        ({ target, value }: { target: unknown; value: unknown }) => ({ target, value: { ...(value as object), b: 2 } }),
-        ({ target, value }: { target: unknown; value: unknown }) => ({ target, value: { ...(value as object), c: 3 } }),
+  it('holds an entry to 64 000 characters, wherever they stand', () => {
+    const result = readEntry({ ...good, padding: 'x'.repeat(MAX_ENTRY_SIZE) });
+    expect(result).toMatchObject({ ok: false, code: 'too-large' });
+  });
+});
+
+describe('S6: entries of an older program', () => {
+  /** A made-up past in which a note was `{ words }` at version 1 and had no kind of its own at version 2. */
+  const shapes: EntryShapes = {
+    versionOf: (kind) => (kind === 'note-written' ? 3 : undefined),
+    migrations: {
+      'note-written': [
+        ({ target, value: { words, ...rest } }) => ({ target, value: { ...rest, text: words } }),
+        ({ target, value }) => ({ target, value: { ...value, about: 'near-miss' } }),
       ],
-    };
-    expect(migrateParts('made-up', { target: 1, value: { a: 1 } }, 1, 3, migrations)).toEqual({
-      target: 1,
-      value: { a: 1, b: 2, c: 3 },
+    },
+  };
+  const old = { ...good, v: 1, value: { words: 'chisel slipped', stepId: null } };
+
+  it('are brought to the present shape, step by step', () => {
+    expect(readEntry(old, shapes)).toMatchObject({
+      ok: true,
+      entry: { v: 3, value: { text: 'chisel slipped', about: 'near-miss' } },
     });
-    expect(() => migrateParts('made-up', { target: 1, value: {} }, 1, 4, migrations)).toThrow(
-      /no migration of made-up from version 3/,
-    );
+    expect(readEntry({ ...good, v: 2 }, shapes)).toMatchObject({ ok: true, entry: { v: 3 } });
+    expect(readEntry({ ...good, v: 4 }, shapes)).toMatchObject({ ok: false, code: 'newer-version' });
+  });
+
+  it.each([null, 'text', [], 7])('that are broken (%j) are refused, and no migration stumbles over them', (value) => {
+    expect(readEntry({ ...old, value }, shapes)).toMatchObject({ ok: false, code: 'malformed' });
+  });
+
+  it('a release that forgot its migration says which', () => {
+    expect(() => readEntry(old, { ...shapes, migrations: {} })).toThrow('no migration of note-written from version 1');
+    expect(() => migrateParts('constructor', { target: {}, value: {} }, 1, 2)).toThrow('no migration of constructor');
   });
 });
 
@@ -99,6 +122,24 @@ describe('S4: the stamp', () => {
       8_000,
     ],
   ])('%s', (_name, input, stamp) => expect(assignStamp(input)).toBe(stamp));
+
+  it('keeps its bounds whatever the clock says, and never goes behind what is known', () => {
+    const ms = fc.integer({ min: -8e15, max: 8e15 });
+    fc.assert(
+      fc.property(ms, ms, fc.nat(), fc.nat(), fc.nat(), (madeAt, clockOffsetMs, past, seenAgo, beforeAgo) => {
+        const receivedAt = 1e12 + past;
+        const [seenStamp, previousStamp] = [receivedAt - seenAgo, receivedAt - beforeAgo];
+        const stamp = assignStamp({ madeAt, clockOffsetMs, receivedAt, seenStamp, previousStamp });
+        expect(stamp).toBeLessThanOrEqual(receivedAt);
+        expect(stamp).toBeGreaterThanOrEqual(Math.max(seenStamp, previousStamp));
+        expect(Number.isSafeInteger(stamp)).toBe(true);
+      }),
+    );
+  });
+
+  it('lets what was seen rule where the clock of the server itself went back', () => {
+    expect(assignStamp({ ...base, seenStamp: 12_000 })).toBe(12_000);
+  });
 
   it('is estimated by the phone in the same way', () => {
     expect(estimateStamp({ madeAt: 5_000, clockOffsetMs: -1_000, seenStamp: 4_500, previousStamp: null })).toBe(4_500);

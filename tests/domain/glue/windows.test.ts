@@ -1,7 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { adhesiveClasses } from '@/lib/domain/glue/adhesives';
-import { calendarFile } from '@/lib/domain/glue/calendar-file';
 import { timerView } from '@/lib/domain/glue/timer-view';
 import { glueWindows } from '@/lib/domain/glue/windows';
 
@@ -32,12 +31,30 @@ describe('glue windows', () => {
     expect(glueWindows({ ...pva, adhesiveClass: 'fish' }, { temperatureC: 20 })).toMatchObject({ known: false });
   });
 
-  it('cold lengthens the long end of clamp and cure by the stated rule', () => {
+  it('cold lengthens clamp and cure by the stated rule, and leaves open time alone', () => {
     // 2^((21 − 11)/10) = 2.
     const windows = known(pva, 11);
-    expect([windows.clamp.min, windows.clamp.max]).toEqual([30, 120]);
+    expect([windows.clamp.min, windows.clamp.max]).toEqual([60, 120]);
     expect(windows.cure.max).toBe(2 * 1440);
-    expect(windows.clamp.working.formula).toContain('2^((21 − T) ÷ 10)');
+    expect([windows.open.min, windows.open.max]).toEqual([4, 8]);
+    expect(windows.clamp.working).toMatchObject({
+      formula: 'the range × 2^((21 − T) ÷ 10)',
+      inputs: { range: '30–60 min', T: '11 °C' },
+    });
+  });
+
+  it('warmth shortens open and assembly time by the stated rule, and leaves clamp and cure alone', () => {
+    // 2^((21 − 31)/10) = 1/2.
+    const windows = known(pva, 31);
+    expect([windows.open.min, windows.open.max]).toEqual([2, 4]);
+    expect([windows.totalAssembly.min, windows.totalAssembly.max]).toEqual([4, 7.5]);
+    expect([windows.clamp.min, windows.clamp.max]).toEqual([30, 60]);
+  });
+
+  it('holds at its own least temperature and not a tenth below', () => {
+    expect(known(pva, 10).temperature).toBe('fits');
+    expect(known(pva, 9.9).temperature).toBe('too-cold');
+    expect(known({ ...pva, label: { leastTemperatureC: 5 } }, 9.9).temperature).toBe('fits');
   });
 
   it('never corrects to better than the figures', () => {
@@ -91,6 +108,27 @@ describe('a glue timer', () => {
     expect(timerView(off, windows, (5 + 1440) * MINUTE).phase).toBe('cured');
   });
 
+  it('says while the glue is open by when the clamps must be tight', () => {
+    expect(timerView(timer({}), windows, MINUTE).pressBy).toEqual({ earliest: 8 * MINUTE, latest: 15 * MINUTE });
+    expect(timerView(timer({ 'clamps-on': MINUTE }), windows, 2 * MINUTE).pressBy).toBeNull();
+  });
+
+  it('of glue that went on too cold never comes to an end of its own', () => {
+    const cold = known(pva, 4);
+    expect(timerView(timer({ 'clamps-on': MINUTE }), cold, 1e12)).toMatchObject({
+      phase: 'in-clamps',
+      earliest: null,
+      latest: null,
+      overdue: false,
+    });
+    expect(timerView(timer({ 'clamps-on': MINUTE, 'clamps-off': 2 * MINUTE }), cold, 1e12).phase).toBe('curing');
+  });
+
+  it('of glue with unknown times counts up and promises nothing', () => {
+    const unknown = glueWindows({ ...pva, adhesiveClass: 'fish' }, { temperatureC: 20 });
+    expect(timerView(timer({}), unknown, 1e12)).toMatchObject({ phase: 'open', latest: null, overdue: false });
+  });
+
   it('tells clamps that came off early and pressure that came late', () => {
     expect(timerView(timer({ 'clamps-on': 5 * MINUTE, 'clamps-off': 10 * MINUTE }), windows, 0).clampsOffEarly).toBe(
       true,
@@ -100,40 +138,5 @@ describe('a glue timer', () => {
       clampsOffEarly: false,
       pressedLate: false,
     });
-  });
-});
-
-/** A small reader of RFC 5545 that shares nothing with the writer. */
-function readCalendar(text: string): Map<string, string> {
-  expect(text.endsWith('\r\n')).toBe(true);
-  for (const line of text.split('\r\n')) expect(new TextEncoder().encode(line).length).toBeLessThanOrEqual(75);
-  const lines = text.replaceAll('\r\n ', '').trimEnd().split('\r\n');
-  return new Map(lines.map((line) => [line.slice(0, line.indexOf(':')), line.slice(line.indexOf(':') + 1)]));
-}
-
-describe('a calendar file', () => {
-  const event = {
-    uid: 'timer-1',
-    title: 'Clamps off: lid; halves, both',
-    description: 'Look first\nat the label',
-    at: Date.UTC(2026, 11, 1, 20, 30),
-    madeAt: Date.UTC(2026, 11, 1, 19, 0),
-  };
-  it('names the moment in UTC with an alarm at it', () => {
-    const fields = readCalendar(calendarFile(event));
-    expect(fields.get('DTSTART')).toBe('20261201T203000Z');
-    expect(fields.get('TRIGGER')).toBe('PT0S');
-    expect(fields.get('UID')).toBe('timer-1@holdfast.example');
-    expect(fields.get('SUMMARY')).toBe('Clamps off: lid\\; halves\\, both');
-  });
-
-  it('folds any text without cutting a character', () => {
-    fc.assert(
-      fc.property(fc.string({ unit: 'grapheme', maxLength: 200 }), (title) => {
-        const fields = readCalendar(calendarFile({ ...event, title: title.replace(/[\r\n]/g, ' ') }));
-        const back = fields.get('SUMMARY')!.replace(/\\([\\;,])/g, '$1');
-        expect(back).toBe(title.replace(/[\r\n]/g, ' '));
-      }),
-    );
   });
 });
