@@ -1,5 +1,6 @@
 import Dexie, { type Table } from 'dexie';
 import { getDeviceId } from './device-database';
+import { refoldAfterUpdate } from './refold-after-update';
 import type { BuildRow, DraftRow, EntryRow, FactRow, PhotoRow } from './rows';
 import type { PlanDocument } from '../domain/plan/document';
 
@@ -110,5 +111,6 @@ async function open(accountId: string): Promise<AccountDatabase> {
       'This browser keeps nothing for Holdfast, as private windows do. Open it in an ordinary window.',
     );
   }
+  await refoldAfterUpdate(db);
   return db;
 }

@@ -80,7 +80,7 @@ export const history = fc
       stamp: fc.integer({ min: 1, max: 12 }),
       held: fc.boolean(),
     }),
-    { maxLength: 40 },
+    { maxLength: 40, size: 'max' },
   )
   .map((rows) =>
     rows.map(({ act, subject, stamp, held }, i) => {
@@ -96,7 +96,7 @@ export const arrivals = history.chain((entries) =>
     order: fc
       .tuple(
         fc.shuffledSubarray(entries, { minLength: entries.length }),
-        entries.length === 0 ? fc.constant([]) : fc.array(fc.constantFrom(...entries), { maxLength: 20 }),
+        entries.length === 0 ? fc.constant([]) : fc.array(fc.constantFrom(...entries), { maxLength: 20, size: 'max' }),
       )
       .chain(([all, again]) => fc.shuffledSubarray([...all, ...again], { minLength: all.length + again.length })),
     size: fc.integer({ min: 1, max: 7 }),

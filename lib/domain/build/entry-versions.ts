@@ -28,3 +28,9 @@ const entryVersions: Record<EntryKind, number> = {
 export function entryVersion(kind: string): number | undefined {
   return Object.hasOwn(entryVersions, kind) ? entryVersions[kind as EntryKind] : undefined;
 }
+
+/** Names every kind with its version. A state that was folded under other ones is folded anew from the entries (S6). */
+export const entryVersionsKey = Object.entries(entryVersions)
+  .map(([kind, v]) => `${kind} ${v}`)
+  .sort()
+  .join(', ');

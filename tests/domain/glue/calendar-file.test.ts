@@ -72,6 +72,7 @@ describe('a calendar file', () => {
         fc.string({ unit: 'grapheme', minLength: 1, maxLength: 1 }),
       ),
       maxLength: 200,
+      size: 'max',
     });
     fc.assert(
       fc.property(text, (title) => {
