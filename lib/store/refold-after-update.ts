@@ -1,8 +1,16 @@
+import type { Dexie, Table } from 'dexie';
 import type { StandingEntry } from '../domain/build/entry';
 import { entryVersionsKey } from '../domain/build/entry-versions';
 import { foldEntries } from '../domain/build/fold';
-import type { AccountDatabase } from './database';
+import type { BuildRow, EntryRow, FactRow } from './rows';
 import { durably } from './saved';
+
+/** What of an account's database this needs; the database itself calls it when it opens. */
+interface FoldedDatabase extends Dexie {
+  builds: Table<BuildRow, string>;
+  entries: Table<EntryRow, string>;
+  facts: Table<FactRow, string>;
+}
 
 const FOLDED_WITH = 'foldedWith';
 
@@ -11,7 +19,7 @@ const FOLDED_WITH = 'foldedWith';
  * was parked counts and what was folded in an older shape has today's. Where the phone has no room for it the builds
  * stay as they are, and the next opening tries again.
  */
-export async function refoldAfterUpdate(db: AccountDatabase): Promise<void> {
+export async function refoldAfterUpdate(db: FoldedDatabase): Promise<void> {
   if ((await db.facts.get(FOLDED_WITH))?.value === entryVersionsKey) return;
   await durably(db, () =>
     db.transaction('rw', db.builds, db.entries, db.facts, async () => {
