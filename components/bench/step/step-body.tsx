@@ -58,6 +58,8 @@ export function StepBody({ step, status, timer, locks, methodId, onMethod }: Ste
       {status.mark === 'open' && (
         <WaitsFor locks={status.locks} stepId={step.id} passed={locks.passed} why={locks.why} />
       )}
+      {/* Before the parts: a long list of them must not push what can hurt out of sight. */}
+      <Cautions cautions={step.cautions} />
       {step.uses.length > 0 && (
         <ul className="grid gap-2" aria-label="Parts">
           {step.uses.map((use) => (
@@ -65,7 +67,6 @@ export function StepBody({ step, status, timer, locks, methodId, onMethod }: Ste
           ))}
         </ul>
       )}
-      <Cautions cautions={step.cautions} />
       {(timer || others.length > 0) && (
         <div className="grid grid-cols-[repeat(auto-fit,minmax(9rem,1fr))] gap-3">
           {[...(timer ? [timer] : []), ...others].map((each) => (
