@@ -186,6 +186,8 @@ test('an afternoon at the bench with the server stopped, and all of it in Postgr
     const second = await other.newPage();
     await signIn(second, program, builder.email, builder.password);
     await takeToBench(second, program, 'Bench for the back door');
+    // Said to be ready means that what is done already is here too: the signal may go at once.
+    await program.stop();
     await second.goto(`${program.url}/bench?build=${buildId}&view=log`);
     await expect(second.getByText(/Board 3 has a knot/).first()).toBeVisible();
     await expect(second.getByText(/Widest board/).first()).toBeVisible();
@@ -193,6 +195,7 @@ test('an afternoon at the bench with the server stopped, and all of it in Postgr
       (await entriesOnPhone(page)).map(({ id, position }) => `${position} ${id}`).sort(),
     );
     expect(await stateOnPhone(second, buildId)).toEqual(await stateOnPhone(page, buildId));
+    await program.start();
     await second.goto(`${program.url}/desk/builds/${buildId}`);
     await expect(second.getByText(/Board 3 has a knot/)).toBeVisible();
     await other.close();

@@ -4,6 +4,7 @@ import { askToPersist } from '@/lib/device/storage-health';
 import type { PackProgress, PackResult } from '@/lib/device/pack';
 import { shellIsReady } from '@/lib/device/service-worker';
 import type { BuildRow } from '@/lib/store/rows';
+import { useSyncAgent } from '@/components/sync/sync-agent';
 import { ActButton } from '../entry/act-button';
 import { Notice } from '@/components/ui/notice';
 import { useAnnounce } from '../shell/announcer';
@@ -19,6 +20,7 @@ const NO_SHELL =
 export function TakeRow({ build, here }: { build: ServerBuild; here: BuildRow | undefined }) {
   const { db } = useBench();
   const announce = useAnnounce();
+  const { sendNow } = useSyncAgent();
   const [progress, setProgress] = useState<PackProgress | null>(null);
   const [failed, setFailed] = useState<string | null>(null);
 
@@ -43,7 +45,10 @@ export function TakeRow({ build, here }: { build: ServerBuild; here: BuildRow | 
         caches: window.caches,
         onProgress: setProgress,
       });
-      if (!taken.ok || (await shellIsReady())) return taken;
+      if (!taken.ok) return taken;
+      // What is done already belongs to what the bench needs: it is fetched before the build is said to be ready.
+      await sendNow();
+      if (await shellIsReady()) return taken;
       return { ok: false, code: 'broken', message: NO_SHELL };
     } catch (error) {
       console.error(error);
