@@ -25,16 +25,16 @@ export const MAX_PLAN_DEPTH = 16;
 export const planDocumentSchema = z.strictObject({
   format: z.literal(PLAN_FORMAT),
   version: z.literal(PLAN_VERSION),
-  /** Stable over the plan's revisions. */
-  id: planId,
-  title: text(120),
-  summary: text(400),
+  id: planId.meta({ description: "Stable over the plan's revisions." }),
+  title: text(120).meta({ description: 'What is built, as a person would call it.' }),
+  summary: text(400).meta({ description: 'One or two sentences for a list of plans.' }),
   description: markdown,
-  author: text(120),
-  licence: text(200),
+  author: text(120).meta({ description: 'Who to credit.' }),
+  licence: text(200).meta({ description: 'What others may do with the plan.' }),
   language: z.string().regex(/^[a-z]{2}(-[A-Z]{2})?$/, 'a language tag such as en or en-GB'),
-  /** System the author wrote it in; a builder's own choice comes first on screen. */
-  units: z.enum(['imperial', 'metric']),
+  units: z
+    .enum(['imperial', 'metric'])
+    .meta({ description: "System the author wrote it in; a builder's own choice comes first on screen." }),
   finished: z.strictObject({
     length: sizeSchema,
     width: sizeSchema,
@@ -42,8 +42,8 @@ export const planDocumentSchema = z.strictObject({
     massG: z.number().positive().max(1_000_000).optional(),
   }),
   hours: minutesRange.meta({ description: 'Hands-on minutes in all, from the quickest to the slowest builder.' }),
-  people: z.int().min(1).max(8),
-  toolsNeeded: z.array(text(80)).max(60),
+  people: z.int().min(1).max(8).meta({ description: 'People needed at the step that needs most.' }),
+  toolsNeeded: z.array(text(80)).max(60).meta({ description: 'Tools without which it cannot be built.' }),
   stages: z.array(stageSchema).min(1).max(30),
   keySizes: z.array(keySizeSchema).max(200),
   stock: z.array(stockSchema).min(1).max(60),

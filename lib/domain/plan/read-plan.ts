@@ -67,6 +67,14 @@ type Issue = {
   expected?: string;
   keys?: string[];
   values?: unknown[];
+  origin?: string;
+  minimum?: number;
+  maximum?: number;
+  inclusive?: boolean;
+  /** Of a union told apart by one field: the values of that field. */
+  options?: unknown[];
+  /** Of a union: what each of its forms found wrong. */
+  errors?: Issue[][];
 };
 
 function shapeProblems(issue: Issue, root: unknown): PlanProblem[] {
@@ -79,16 +87,32 @@ function shapeProblems(issue: Issue, root: unknown): PlanProblem[] {
       message: `A plan has no field "${key}" here.`,
     }));
   }
-  const expected =
-    issue.code === 'invalid_value' && issue.values
-      ? issue.values.map((value) => JSON.stringify(value)).join(' or ')
-      : issue.code === 'invalid_type'
-        ? words(issue.expected ?? issue.message)
-        : issue.code === 'invalid_union'
-          ? 'one of the forms that the plan document describes'
-          : issue.message;
+  const expected = expectedBy(issue);
   const message = found === undefined ? `"${path}" is missing.` : `"${path}" is ${nameOf(found)}.`;
   return [{ path, expected, message }];
+}
+
+function expectedBy(issue: Issue): string {
+  if (issue.code === 'invalid_value' && issue.values) {
+    return issue.values.map((value) => JSON.stringify(value)).join(' or ');
+  }
+  if (issue.code === 'invalid_union') {
+    const forms = (issue.errors ?? [])
+      .flat()
+      .filter(({ path, code }) => path.length === 0 && code !== 'unrecognized_keys');
+    const known = new Set([...forms.map(expectedBy), ...(issue.options ?? []).map((value) => JSON.stringify(value))]);
+    return known.size > 0 ? [...known].join(' or ') : 'one of the forms that the plan document describes';
+  }
+  if (issue.code === 'too_small' || issue.code === 'too_big') return limitOf(issue);
+  const ownWords = !issue.message.startsWith('Invalid');
+  return issue.code === 'invalid_type' && !ownWords ? words(issue.expected ?? issue.message) : issue.message;
+}
+
+function limitOf({ message, origin, minimum, maximum, inclusive }: Issue): string {
+  if (!message.startsWith('Too ')) return message;
+  const of = origin === 'array' ? ' in the list' : origin === 'string' ? ' characters' : '';
+  if (minimum !== undefined) return inclusive === false ? `more than ${minimum}${of}` : `at least ${minimum}${of}`;
+  return `at most ${maximum}${of}`;
 }
 
 function words(type: string): string {
