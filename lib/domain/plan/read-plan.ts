@@ -68,8 +68,8 @@ type Issue = {
   keys?: string[];
   values?: unknown[];
   origin?: string;
-  minimum?: number;
-  maximum?: number;
+  minimum?: number | bigint;
+  maximum?: number | bigint;
   inclusive?: boolean;
   /** Of a union told apart by one field: the values of that field. */
   options?: unknown[];
