@@ -35,6 +35,8 @@ const nextConfig: NextConfig = {
     'pino',
     'nodemailer',
   ],
+  // The build for browsers of today, a tenth smaller than the one that the package's entry names.
+  turbopack: { resolveAlias: { dexie: 'dexie/dist/modern/dexie.min.mjs' } },
   headers: async () => [
     {
       source: '/:path*',

@@ -1,4 +1,5 @@
 'use client';
+import dynamic from 'next/dynamic';
 import { useLiveQuery } from 'dexie-react-hooks';
 import { findStep, stepNumber } from '@/lib/domain/plan/find';
 import { clearDraft } from '@/lib/store/mutations/save-draft';
@@ -8,7 +9,9 @@ import { Notice } from '@/components/ui/notice';
 import { useBench } from '../shell/bench-context';
 import { useBuild } from '../shell/build-context';
 import { ASKED_PHOTO_KEY, readAsked } from './asked-draft';
-import { PhotoButtons } from './photo-buttons';
+
+// Seldom seen, so not part of what a cold opening loads.
+const PhotoButtons = dynamic(() => import('./photo-buttons').then((m) => m.PhotoButtons));
 
 /** After the page was killed behind the camera: says for which step a photo was asked and that none came. */
 export function AskedPhoto() {

@@ -7,10 +7,14 @@ import { BuildProvider } from './build-context';
 import { BuildsView } from '../builds/builds-view';
 import { TimerWatch } from '../timers/timer-watch';
 import { WhatNowView } from '../now/what-now-view';
-import { StepView } from '../step/step-view';
 
-// The three screens that a cold opening shows are in the first load; the others come when they are asked for.
+// What a cold opening shows first is in the first load; the others come when they are asked for. A step's address is the
+// commonest deep one, so its code is asked for with the first load instead of after the build has been read.
+const stepView = () => import('../step/step-view').then((m) => m.StepView);
+if (typeof window !== 'undefined' && window.location.search.includes('view=step')) void stepView();
+
 const loading = () => <BlankBench />;
+const StepView = dynamic(stepView, { loading });
 const TakeView = dynamic(() => import('../builds/take-view').then((m) => m.TakeView), { loading });
 const StepsView = dynamic(() => import('../steps/steps-view').then((m) => m.StepsView), { loading });
 const CutsView = dynamic(() => import('../cuts/cuts-view').then((m) => m.CutsView), { loading });
