@@ -1,7 +1,6 @@
 'use client';
 import { useLiveQuery } from 'dexie-react-hooks';
 import { createContext, useCallback, useContext, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
-import { describeEntry } from '@/lib/domain/build/describe-entry';
 import { lastUndoable } from '@/lib/domain/build/undo';
 import { sessionsOf } from '@/lib/domain/build/views';
 import type { AccountDatabase } from '@/lib/store/database';
@@ -44,8 +43,8 @@ export function useActs(): ActContextValue {
 }
 
 export function ActProvider({ children }: { children: ReactNode }) {
-  const { db, formatRead: format } = useBench();
-  const { build, plan, state } = useBuild();
+  const { db } = useBench();
+  const { build, state } = useBuild();
   const announce = useAnnounce();
   const [lastHere, setLastHere] = useState<LastAct | null>(null);
   const [fault, setFault] = useState<string | null>(null);
@@ -61,13 +60,8 @@ export function ActProvider({ children }: { children: ReactNode }) {
     loadActs().catch((error: unknown) => console.error(error));
   }, []);
 
-  // After a reload the last act is read once from the log, so that a wrong tick before a dead battery can be undone.
-  const before = useLiveQuery(async () => lastUndoable(await getEntries(db, buildId), db.deviceId), [db, buildId]);
-  const last = useMemo<LastAct | null>(() => {
-    if (lastHere) return lastHere;
-    if (!before) return null;
-    return { entryIds: [before.id], words: describeEntry(before, plan, { formatLength: format }), undone: false };
-  }, [lastHere, before, plan, format]);
+  const before = useActBefore(lastHere === null);
+  const last = lastHere ?? before;
 
   const attempt = useCallback(async (run: (acts: Acts) => Promise<Saved | Saved[]>): Promise<string[] | null> => {
     try {
@@ -126,4 +120,32 @@ export function ActProvider({ children }: { children: ReactNode }) {
     [act, last, undoLast, fault, dismissFault],
   );
   return <ActContext.Provider value={value}>{children}</ActContext.Provider>;
+}
+
+/**
+ * The last act of this phone before the page was opened, read from the log, so that a wrong tick before a dead battery
+ * can be undone. Not looked for any more once there is an act of this page.
+ */
+function useActBefore(wanted: boolean): LastAct | null {
+  const { db, formatRead: formatLength } = useBench();
+  const { build, plan } = useBuild();
+  const entry = useLiveQuery(
+    async () => (wanted ? lastUndoable(await getEntries(db, build.id), db.deviceId) : null),
+    [db, build.id, wanted],
+  );
+  const [before, setBefore] = useState<LastAct | null>(null);
+  useEffect(() => {
+    if (!entry) return;
+    let current = true;
+    loadActs()
+      .then(({ describeEntry }) => {
+        const words = describeEntry(entry, plan, { formatLength });
+        if (current) setBefore({ entryIds: [entry.id], words, undone: false });
+      })
+      .catch((error: unknown) => console.error(error));
+    return () => {
+      current = false;
+    };
+  }, [entry, plan, formatLength]);
+  return entry ? before : null;
 }

@@ -1,3 +1,4 @@
+export { describeEntry } from '@/lib/domain/build/describe-entry';
 export { addPhoto, captionPhoto } from '@/lib/store/mutations/add-photo';
 export { markPiece } from '@/lib/store/mutations/mark-piece';
 export { markStep } from '@/lib/store/mutations/mark-step';
