@@ -15,6 +15,9 @@ import { StorageFault } from './shell/storage-fault';
 import { useAccount } from './shell/use-account';
 import { useAppearance } from './shell/use-appearance';
 import { ViewSwitch } from './shell/view-switch';
+import { warmUp } from './shell/warm-up';
+
+if (typeof window !== 'undefined') void warmUp(window.location.search);
 
 const never = () => () => {};
 

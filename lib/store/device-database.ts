@@ -57,6 +57,9 @@ async function readFact<T>(key: string): Promise<T | undefined> {
 
 /** Id of this browser profile, made once. */
 export async function getDeviceId(): Promise<string> {
+  // Looked up without a write first: a durable write would hold up every opening.
+  const kept = await readFact<string>('deviceId');
+  if (kept) return kept;
   const db = deviceDatabase();
   return db.transaction('rw', db.facts, async () => {
     const known = await readFact<string>('deviceId');

@@ -14,6 +14,16 @@ const TAPS = 60;
 const OPENS = 7;
 const BUILD_NAME = 'Three hundred steps';
 
+/** As text, since the page knows nothing of what the loader wraps functions in. */
+const MARK_USABLE = `
+  const observer = new MutationObserver(() => {
+    if (![...document.querySelectorAll('button')].some((button) => button.textContent.trim() === 'Done')) return;
+    observer.disconnect();
+    requestAnimationFrame(() => requestAnimationFrame(() => performance.mark('usable')));
+  });
+  observer.observe(document, { subtree: true, childList: true });
+`;
+
 const program = await Program.prepare({ seed: true });
 const browser = await chromium.launch({ executablePath: '/usr/bin/chromium', args: ['--no-sandbox', '--disable-gpu'] });
 try {
@@ -88,14 +98,15 @@ async function slowPage(context: BrowserContext, rate: number): Promise<Page> {
   return page;
 }
 
+/** From the start of the navigation until the plate to tap stands there and is painted, as the page itself saw it. */
 async function coldOpens(context: BrowserContext, buildId: string): Promise<number[]> {
   const times: number[] = [];
   for (let i = 0; i < OPENS; i += 1) {
     const page = await slowPage(context, 4);
-    const from = performance.now();
+    await page.addInitScript(MARK_USABLE);
     await page.goto(`${program.url}/bench?build=${buildId}&view=step&step=extra-${200 + i}`, { waitUntil: 'commit' });
-    await page.getByRole('button', { name: 'Done', exact: true }).waitFor();
-    times.push(performance.now() - from);
+    await page.waitForFunction(() => performance.getEntriesByName('usable').length > 0);
+    times.push(await page.evaluate(() => performance.getEntriesByName('usable')[0]!.startTime));
     await page.close();
   }
   return times;

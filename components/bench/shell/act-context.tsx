@@ -55,12 +55,7 @@ export function ActProvider({ children }: { children: ReactNode }) {
   useEffect(() => {
     isOpen.current = sessionOpen;
   }, [sessionOpen]);
-  useEffect(() => {
-    // Ready before the first tap; an act that comes sooner waits for the same load.
-    loadActs().catch((error: unknown) => console.error(error));
-  }, []);
-
-  const before = useActBefore(lastHere === null);
+  const before = useActBefore(useIdleActs(), lastHere === null);
   const last = lastHere ?? before;
 
   const attempt = useCallback(async (run: (acts: Acts) => Promise<Saved | Saved[]>): Promise<string[] | null> => {
@@ -126,26 +121,34 @@ export function ActProvider({ children }: { children: ReactNode }) {
  * The last act of this phone before the page was opened, read from the log, so that a wrong tick before a dead battery
  * can be undone. Not looked for any more once there is an act of this page.
  */
-function useActBefore(wanted: boolean): LastAct | null {
+function useActBefore(acts: Acts | null, wanted: boolean): LastAct | null {
   const { db, formatRead: formatLength } = useBench();
   const { build, plan } = useBuild();
   const entry = useLiveQuery(
     async () => (wanted ? lastUndoable(await getEntries(db, build.id), db.deviceId) : null),
     [db, build.id, wanted],
   );
-  const [before, setBefore] = useState<LastAct | null>(null);
+  return useMemo(() => {
+    if (!entry || !acts) return null;
+    return { entryIds: [entry.id], words: acts.describeEntry(entry, plan, { formatLength }), undone: false };
+  }, [acts, entry, plan, formatLength]);
+}
+
+/** The acts, loaded when the screen has been drawn: before the first tap, as a rule. One that comes sooner loads them. */
+function useIdleActs(): Acts | null {
+  const [acts, setActs] = useState<{ loaded: Acts } | null>(null);
   useEffect(() => {
-    if (!entry) return;
-    let current = true;
-    loadActs()
-      .then(({ describeEntry }) => {
-        const words = describeEntry(entry, plan, { formatLength });
-        if (current) setBefore({ entryIds: [entry.id], words, undone: false });
-      })
-      .catch((error: unknown) => console.error(error));
-    return () => {
-      current = false;
+    const load = () => {
+      loadActs()
+        .then((loaded) => setActs({ loaded }))
+        .catch((error: unknown) => console.error(error));
     };
-  }, [entry, plan, formatLength]);
-  return entry ? before : null;
+    if (typeof requestIdleCallback === 'undefined') {
+      const timer = setTimeout(load, 300);
+      return () => clearTimeout(timer);
+    }
+    const idle = requestIdleCallback(load, { timeout: 2_000 });
+    return () => cancelIdleCallback(idle);
+  }, []);
+  return acts?.loaded ?? null;
 }

@@ -1,6 +1,6 @@
 'use client';
 import { useLiveQuery } from 'dexie-react-hooks';
-import { createContext, useContext, useMemo, type ReactNode } from 'react';
+import { createContext, useContext, useMemo, useState, type ReactNode } from 'react';
 import type { BuildState } from '@/lib/domain/build/state';
 import { measuredKeySizes } from '@/lib/domain/build/views';
 import { whatNow, type WhatNow } from '@/lib/domain/build/what-now';
@@ -14,6 +14,7 @@ import { useClock } from '../entry/use-clock';
 import { useBench } from './bench-context';
 import { BlankBench } from './blank-bench';
 import { MissingBuild } from './missing-build';
+import { takeWarm } from './warm-up';
 
 export interface BuildContextValue {
   build: BuildRow;
@@ -42,12 +43,18 @@ const JUDGE_EVERY_MS = 15_000;
 /** One build with its plan and all that follows from its state, straight from the phone's storage. */
 export function BuildProvider({ buildId, children }: { buildId: string; children: ReactNode }) {
   const { db } = useBench();
-  const row = useLiveQuery(async () => ({ build: await getBuild(db, buildId) }), [db, buildId]);
+  const [warm] = useState(() => takeWarm(db.accountId, buildId));
+  const row = useLiveQuery(
+    async () => ({ build: await getBuild(db, buildId) }),
+    [db, buildId],
+    warm ? { build: warm.build } : undefined,
+  );
   const build = row?.build;
   const contentHash = build?.contentHash;
   const planRow = useLiveQuery(
     async () => (contentHash ? { contentHash, plan: await getPlan(db, contentHash) } : null),
     [db, contentHash],
+    warm ? { contentHash: warm.build.contentHash, plan: warm.plan } : undefined,
   );
   const plan = planRow?.contentHash === contentHash ? planRow?.plan : undefined;
   const clock = useClock(JUDGE_EVERY_MS);

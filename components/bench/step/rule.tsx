@@ -59,7 +59,6 @@ export function Rule({ marks, here, onMove }: RuleProps) {
   const shown = aimed ?? here;
   const mark = marks[shown];
   if (!mark) return null;
-  const pitch = height / marks.length;
   const numbered = numberedMarks(marks, height, shown);
 
   return (
@@ -85,15 +84,7 @@ export function Rule({ marks, here, onMove }: RuleProps) {
         className="absolute inset-y-0 left-0 z-10 w-[60px] cursor-pointer touch-none select-none"
       >
         <svg className="h-full w-[44px] overflow-visible" aria-hidden="true">
-          {marks.map((each, index) => (
-            <Graduation
-              key={each.stepId}
-              mark={each}
-              place={markPlace(index, marks.length)}
-              pitch={pitch}
-              numbered={numbered.has(index)}
-            />
-          ))}
+          <Graduations marks={marks} height={height} numbered={numbered} />
           <Pointer place={markPlace(shown, marks.length)} number={mark.number} />
         </svg>
       </div>
@@ -110,38 +101,53 @@ export function Rule({ marks, here, onMove }: RuleProps) {
   );
 }
 
-function Graduation({
-  mark,
-  place,
-  pitch,
-  numbered,
-}: {
-  mark: RuleMark;
-  place: number;
-  pitch: number;
-  numbered: boolean;
-}) {
-  const { stroke, width, dash } = STROKES[mark.look];
-  const y = `${place * 100}%`;
-  const from = mark.stageStart ? (numbered ? 8 + 7.5 * String(mark.number).length : 18) : 29;
+interface GraduationsProps {
+  marks: readonly RuleMark[];
+  height: number;
+  numbered: ReadonlySet<number>;
+}
+
+/** One path for each look, since a rule of some hundred steps is drawn anew at every tick. */
+function Graduations({ marks, height, numbered }: GraduationsProps) {
+  const pitch = height / marks.length;
+  const looks = Object.entries(STROKES) as [RuleMarkLook, (typeof STROKES)[RuleMarkLook]][];
   return (
     <>
-      <line
-        x1={from}
-        x2={EDGE}
-        y1={y}
-        y2={y}
-        stroke={stroke}
-        strokeWidth={Math.min(width, Math.max(1, pitch * 0.6))}
-        strokeDasharray={dash}
-      />
-      {numbered && (
-        <text x={4} y={y} dy="0.36em" className="figures" fontSize={16} fontWeight={600} fill="var(--iron)">
-          {mark.number}
+      {looks.map(([look, { stroke, width, dash }]) => (
+        <path
+          key={look}
+          d={graduationPath(marks, look, height, numbered)}
+          stroke={stroke}
+          strokeWidth={Math.min(width, Math.max(1, pitch * 0.6))}
+          strokeDasharray={dash}
+        />
+      ))}
+      {[...numbered].map((index) => (
+        <text
+          key={index}
+          x={4}
+          y={markPlace(index, marks.length) * height}
+          dy="0.36em"
+          className="figures"
+          fontSize={16}
+          fontWeight={600}
+          fill="var(--iron)"
+        >
+          {marks[index]!.number}
         </text>
-      )}
+      ))}
     </>
   );
+}
+
+function graduationPath(marks: readonly RuleMark[], look: RuleMarkLook, height: number, numbered: ReadonlySet<number>) {
+  return marks
+    .map((mark, index) => {
+      if (mark.look !== look) return '';
+      const from = mark.stageStart ? (numbered.has(index) ? 8 + 7.5 * String(mark.number).length : 18) : 29;
+      return `M${from} ${(markPlace(index, marks.length) * height).toFixed(2)}H${EDGE}`;
+    })
+    .join('');
 }
 
 function Pointer({ place, number }: { place: number; number: number }) {
