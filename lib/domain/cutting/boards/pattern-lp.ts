@@ -25,7 +25,12 @@ export class PatternLp {
   readonly lp: LinearProgram;
   readonly patterns: Pattern[] = [];
   /** The duals that gave the best bound: worth of each width, and of the best pattern of each slot. */
-  rootDuals = { worths: new Float64Array(0), slotWorths: new Float64Array(0), bound: -Infinity };
+  rootDuals: Pricing = {
+    patterns: [],
+    bound: -Infinity,
+    worths: new Float64Array(0),
+    slotWorths: new Float64Array(0),
+  };
   private readonly known = new Set<string>();
   private readonly firstKind: number;
   private readonly firstPattern: number;
@@ -164,8 +169,9 @@ export class PatternLp {
    */
   boundOfNode(): number {
     const { lp, problem, widthCount } = this;
+    for (let r = 0; r < lp.rows; r++) lp.duals[r] = Math.max(0, lp.duals[r]!);
     let bound = 0;
-    for (let i = 0; i < widthCount; i++) bound += Math.max(0, lp.duals[i]!) * problem.demands[i]!;
+    for (let i = 0; i < widthCount; i++) bound += lp.duals[i]! * problem.demands[i]!;
     for (let column = this.firstKind; column < lp.columns; column++) {
       const reduced = lp.reducedCost(column);
       bound += reduced * (reduced > 0 ? lp.lowerOf(column) : lp.upperOf(column));

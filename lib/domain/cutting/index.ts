@@ -1,0 +1,14 @@
+export { checkBoardPlan } from './boards/check-board-plan';
+export { planBoards } from './boards/plan-boards';
+export type {
+  AvoidedStretch,
+  BoardCut,
+  BoardPart,
+  BoardPlan,
+  BoardRequest,
+  BoardStock,
+  PlannedBoard,
+  UnplacedPart,
+} from './boards/request';
+export { CuttingRequestError } from './request-error';
+export type { RunControl } from './run-control';
