@@ -26,6 +26,16 @@ interface PackDeps {
 /** The account's own cache of pack files; emptied at sign-out. */
 export const packCacheName = (accountId: string) => `holdfast-pack-${accountId}`;
 
+/** A file of a build's pack as it lies on this phone, or null where it does not: not taken yet, or cleared away. */
+export async function packFile(
+  caches: Pick<CacheStorage, 'open'>,
+  { accountId, buildId, sha256 }: { accountId: string; buildId: string; sha256: string },
+): Promise<Blob | null> {
+  const cache = await caches.open(packCacheName(accountId));
+  const kept = await cache.match(`/api/builds/${buildId}/pack/files/${sha256}`);
+  return kept ? kept.blob() : null;
+}
+
 /**
  * Downloads all that a build needs with no signal, verifies each file by its hash, and makes the build ready in one
  * write. Nothing is ready half: on any failure what was ready before stays as it was.

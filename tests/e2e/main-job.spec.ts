@@ -73,6 +73,18 @@ test('an afternoon at the bench with the server stopped, and all of it in Postgr
     }
   });
 
+  await test.step('the drawings of the pack', async () => {
+    await page.goto(`${program.url}/bench?build=${buildId}&view=drawings`);
+    await page.getByRole('button', { name: 'Front and side, with the main sizes: show it large' }).click();
+    const drawing = page.getByRole('dialog').getByRole('img');
+    await expect.poll(() => drawing.evaluate((image) => (image as HTMLImageElement).naturalWidth)).toBeGreaterThan(100);
+    const fitted = (await drawing.boundingBox())!.width;
+    await page.getByRole('button', { name: 'Larger' }).click();
+    await expect.poll(async () => (await drawing.boundingBox())!.width).toBeGreaterThan(fitted * 1.4);
+    await page.getByRole('button', { name: 'Close' }).click();
+    await expect(page.getByRole('dialog')).toHaveCount(0);
+  });
+
   await test.step('ten steps', async () => {
     await openStep(page, buildId, 'choose-boards');
     await tickHere(page);

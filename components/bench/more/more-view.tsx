@@ -13,6 +13,12 @@ export function MoreView() {
   const buildId = build.id;
   const ways: { to: Partial<BenchAddress>; word: string; says: string }[] = [
     { to: { buildId, view: 'log' }, word: 'Build log', says: 'All that was done, by day' },
+    {
+      to: { buildId, view: 'drawings' },
+      word: 'Drawings',
+      says:
+        plan.attachments.length > 0 ? count(plan.attachments.length, 'file', 'files') : 'The piece from three sides',
+    },
     { to: { buildId, view: 'photos' }, word: 'Photos', says: count(photosOf(state).length, 'photo', 'photos') },
     {
       to: { buildId, view: 'notes' },

@@ -13,6 +13,7 @@ export const benchViews = [
   'photos',
   'notes',
   'sizes',
+  'drawings',
   'log',
   'close',
   'more',

@@ -22,6 +22,7 @@ const TimersView = dynamic(() => import('../timers/timers-view').then((m) => m.T
 const PhotosView = dynamic(() => import('../photos/photos-view').then((m) => m.PhotosView), { loading });
 const NotesView = dynamic(() => import('../notes/notes-view').then((m) => m.NotesView), { loading });
 const SizesView = dynamic(() => import('../sizes/sizes-view').then((m) => m.SizesView), { loading });
+const DrawingsView = dynamic(() => import('../drawings/drawings-view').then((m) => m.DrawingsView), { loading });
 const LogView = dynamic(() => import('../log/log-view').then((m) => m.LogView), { loading });
 const CloseDownView = dynamic(() => import('../close/close-down-view').then((m) => m.CloseDownView), { loading });
 const MoreView = dynamic(() => import('../more/more-view').then((m) => m.MoreView), { loading });
@@ -73,6 +74,8 @@ function BuildView({ address }: { address: BenchAddress }) {
       return <NotesView stepId={address.stepId} />;
     case 'sizes':
       return <SizesView stepId={address.stepId} />;
+    case 'drawings':
+      return <DrawingsView />;
     case 'log':
       return <LogView />;
     case 'close':

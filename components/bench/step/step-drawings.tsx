@@ -4,20 +4,15 @@ import type { PlanFace, PlanStep } from '@/lib/domain/plan/document';
 import { evaluateSize } from '@/lib/domain/plan/key-sizes';
 import { FaceMap } from '@/components/diagrams/face-map';
 import { PlacementDrawing } from '@/components/diagrams/placement-drawing';
-import type { Elevation } from '@/components/diagrams/project-box';
+import { ELEVATIONS, ElevationChoice } from '../drawings/elevation-choice';
+import { PackFileFigure } from '../drawings/pack-file-figure';
 import { useBench } from '../shell/bench-context';
 import { useBuild } from '../shell/build-context';
-
-const VIEWS: readonly { elevation: Elevation; word: string; from: string }[] = [
-  { elevation: 'front', word: 'Front', from: 'from the front' },
-  { elevation: 'side', word: 'Side', from: 'from the right' },
-  { elevation: 'top', word: 'Top', from: 'from above' },
-];
 
 /** Where this step's parts go in the piece, and the faces that it fastens or cuts. */
 export function StepDrawings({ step }: { step: PlanStep }) {
   const { plan, parts, now } = useBuild();
-  const [elevation, setElevation] = useState<Elevation>('front');
+  const [view, setView] = useState<(typeof ELEVATIONS)[number]>(ELEVATIONS[0]);
   const done = useMemo(
     () => new Set(plan.steps.filter(({ id }) => now.statuses[id]?.mark === 'done').map(({ id }) => id)),
     [plan, now],
@@ -38,9 +33,9 @@ export function StepDrawings({ step }: { step: PlanStep }) {
       face.cuts.some((cut) => cut.step === step.id) ||
       face.fasteners.some((fastener) => fastener.step === step.id || fastener.removedIn === step.id),
   );
-  if (!placed && faces.length === 0) return null;
+  const files = plan.attachments.filter(({ steps }) => steps.includes(step.id));
+  if (!placed && faces.length === 0 && files.length === 0) return null;
   const labels = [...used].flatMap((id) => parts.get(id)?.part.label ?? []);
-  const view = VIEWS.find((each) => each.elevation === elevation)!;
   return (
     <section aria-label="Drawings" className="grid gap-4">
       {placed && (
@@ -49,31 +44,20 @@ export function StepDrawings({ step }: { step: PlanStep }) {
             placements={plan.placements}
             highlighted={used}
             standing={standing}
-            elevation={elevation}
+            elevation={view.elevation}
             label={`Where ${labels.join(', ')} go, seen ${view.from}`}
           />
           <figcaption className="flex flex-wrap items-center justify-between gap-2 text-[1.0625rem] text-soft">
             <span>{labels.join(', ')} in the piece</span>
-            <span className="flex" role="group" aria-label="Seen from">
-              {VIEWS.map((each) => (
-                <button
-                  key={each.elevation}
-                  type="button"
-                  aria-pressed={each.elevation === elevation}
-                  onClick={() => setElevation(each.elevation)}
-                  className={`min-h-[52px] px-4 font-figures text-[1.125rem] font-medium active:bg-line ${
-                    each.elevation === elevation ? 'text-iron shadow-[inset_0_-4px_0_var(--iron)]' : 'text-blue'
-                  }`}
-                >
-                  {each.word}
-                </button>
-              ))}
-            </span>
+            <ElevationChoice chosen={view} onChoose={setView} />
           </figcaption>
         </figure>
       )}
       {faces.map((face) => (
         <FaceFigure key={face.id} face={face} stepId={step.id} done={done} />
+      ))}
+      {files.map((file) => (
+        <PackFileFigure key={file.id} file={file} />
       ))}
     </section>
   );
