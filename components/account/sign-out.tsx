@@ -19,7 +19,7 @@ type Stage =
   /** This browser does not say what is held in it. */
   | { at: 'unknown'; words: string };
 
-const none: HeldCounts = { entries: 0, photos: 0, refused: 0, oldestAt: null };
+const none: HeldCounts = { entries: 0, photos: 0, refused: 0, refusedPhotos: 0, oldestAt: null };
 
 /**
  * Signs this browser out. Where records of the account are only here, it says how many and asks: they are never thrown

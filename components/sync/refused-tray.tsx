@@ -4,18 +4,32 @@ import { useState } from 'react';
 import { describeEntry } from '@/lib/domain/build/describe-entry';
 import { getBuild, getPlan } from '@/lib/store/queries/builds';
 import { getRefused, getRefusedPhotos } from '@/lib/store/queries/held';
+import { sendAgain } from '@/lib/store/mutations/send-again';
 import type { EntryRow } from '@/lib/store/rows';
 import { dayAndTime } from '@/components/bench/entry/time-words';
 import { useClock } from '@/components/bench/entry/use-clock';
 import { useBench } from '@/components/bench/shell/bench-context';
+import { useSyncAgent } from './sync-agent';
 import { ActButton } from '@/components/bench/entry/act-button';
 
-/** What the server refused, each with its reason and its words, which can be copied. Nothing leaves by itself. */
+/**
+ * What the server refused, each with its reason and its words, which can be copied. Nothing leaves by itself; all of it
+ * can be sent once more when what stood in the way has been put right.
+ */
 export function RefusedTray() {
   const { db } = useBench();
+  const { sendNow } = useSyncAgent();
+  const [fault, setFault] = useState<string | null>(null);
   const refused = useLiveQuery(() => getRefused(db), [db]);
   const photos = useLiveQuery(() => getRefusedPhotos(db), [db]);
   const clock = useClock(60_000);
+
+  async function again() {
+    const notHeld = await sendAgain(db);
+    setFault(notHeld?.message ?? null);
+    if (!notHeld) await sendNow();
+  }
+
   if (!refused?.length && !photos?.length) return null;
   return (
     <section aria-labelledby="refused" className="grid gap-3">
@@ -36,6 +50,14 @@ export function RefusedTray() {
           </li>
         ))}
       </ul>
+      <ActButton className="justify-self-start" onClick={() => void again()}>
+        Send these again
+      </ActButton>
+      {fault && (
+        <p role="alert" className="font-semibold text-red">
+          {fault}
+        </p>
+      )}
     </section>
   );
 }

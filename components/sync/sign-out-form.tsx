@@ -24,7 +24,7 @@ export function SignOutForm({ onLeave }: { onLeave: () => void }) {
   const [typed, setTyped] = useState('');
   const [busy, setBusy] = useState(false);
   const [fault, setFault] = useState<string | null>(null);
-  const count = held.entries + held.photos + held.refused;
+  const count = held.entries + held.photos + held.refused + held.refusedPhotos;
 
   async function leave(how: 'keep' | 'discard') {
     setBusy(true);
@@ -53,7 +53,8 @@ export function SignOutForm({ onLeave }: { onLeave: () => void }) {
       {count > 0 ? (
         <>
           <Notice tone="wait" title={`${count} held here.`}>
-            {heldWords({ entries: held.entries + held.refused, photos: held.photos })} are only on this phone
+            {heldWords({ entries: held.entries + held.refused, photos: held.photos + held.refusedPhotos })} are only on
+            this phone
             {status.lastError && `: ${status.lastError}`}
           </Notice>
           <Button

@@ -6,7 +6,8 @@ import { useHeld } from './use-held';
 /** What is still only on this phone, in words; opens what there is to say about sending. */
 export function SyncBadge({ onOpen }: { onOpen: () => void }) {
   const { held, status, known } = useHeld();
-  const needsYou = held.refused > 0 || (held.entries + held.photos > 0 && status.state === 'sign-in');
+  const needsYou =
+    held.refused + held.refusedPhotos > 0 || (held.entries + held.photos > 0 && status.state === 'sign-in');
   return (
     <button
       type="button"

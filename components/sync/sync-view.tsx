@@ -80,7 +80,7 @@ export function SyncView({ buildId }: { buildId: string | null }) {
           <ActButton pending={status.state === 'sending'} pendingLabel="Sending" onClick={() => void sendNow()}>
             Send now
           </ActButton>
-          <ActButton disabled={count + held.refused === 0} onClick={() => void exportHeld()}>
+          <ActButton disabled={count + held.refused + held.refusedPhotos === 0} onClick={() => void exportHeld()}>
             Save as a file
           </ActButton>
         </div>

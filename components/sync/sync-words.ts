@@ -4,7 +4,8 @@ import type { SyncStatus } from '@/lib/store/rows';
 /** What the badge says, always in words. What is only here comes first; a refusal that waits for a person before it. */
 export function badgeWords(held: HeldCounts, status: SyncStatus, clock: (ms: number) => string): string {
   const count = held.entries + held.photos;
-  if (held.refused > 0) return `${held.refused} need you`;
+  const refused = held.refused + held.refusedPhotos;
+  if (refused > 0) return `${refused} need you`;
   if (count > 0 && status.state === 'sign-in') return `Sign in to send ${count}`;
   if (count > 0 && status.state === 'update-needed') return `Update to send ${count}`;
   if (count > 0) return `${count} held here`;

@@ -4,7 +4,7 @@ import { useBench } from '@/components/bench/shell/bench-context';
 import { getHeldCounts, getSyncStatus, noSyncYet, type HeldCounts } from '@/lib/store/queries/held';
 import type { SyncStatus } from '@/lib/store/rows';
 
-const nothing: HeldCounts = { entries: 0, photos: 0, refused: 0, oldestAt: null };
+const nothing: HeldCounts = { entries: 0, photos: 0, refused: 0, refusedPhotos: 0, oldestAt: null };
 
 /** What is only on this phone, and how sending stands; `known` is false until the phone has said so. */
 export function useHeld(): { held: HeldCounts; status: SyncStatus; known: boolean } {

@@ -3,6 +3,7 @@ import { stepMark, notesOf } from '@/lib/domain/build/views';
 import { markStep } from '@/lib/store/mutations/mark-step';
 import { addPhoto } from '@/lib/store/mutations/add-photo';
 import { undoEntry } from '@/lib/store/mutations/undo-entry';
+import { sendAgain } from '@/lib/store/mutations/send-again';
 import { writeNote } from '@/lib/store/mutations/write-note';
 import { getHeldCounts, getRefused, getSyncStatus } from '@/lib/store/queries/held';
 import { FakeSyncServer, type Trouble } from '../fakes/sync-server';
@@ -96,6 +97,14 @@ describe('sending', () => {
     expect(stepMark(await state(), 'cut-legs')).toBe('open');
     expect(stepMark(await state(), 'cut-rails')).toBe('done');
     expect(plain(await state())).toEqual(plain(server.state()));
+    // Sent again when what stood in the way is put right: it counts here at once and there once.
+    server.refuses.clear();
+    await sendAgain(phone.db);
+    expect(stepMark(await state(), 'cut-legs')).toBe('done');
+    await phone.runner.syncNow();
+    expect(server.log.filter(({ id }) => id === bad.entryId)).toHaveLength(1);
+    expect(await getRefused(phone.db)).toEqual([]);
+    expect(plain(await state())).toEqual(plain(server.state()));
   });
 
   it('S5: a batch that is too large is halved until it fits', async () => {
@@ -175,6 +184,11 @@ describe('photos', () => {
     const row = await phone.db.photos.get([BUILD, 'a'.repeat(64)]);
     expect(row).toMatchObject({ sync: 'refused', refusal: 'The server says too-large.' });
     expect(row!.bytes.byteLength).toBe(3);
+    expect(await getHeldCounts(phone.db)).toMatchObject({ photos: 0, refusedPhotos: 1 });
+    await sendAgain(phone.db);
+    await phone.runner.syncNow();
+    expect(server.photos.size).toBe(1);
+    expect(await getHeldCounts(phone.db)).toMatchObject({ photos: 0, refusedPhotos: 0 });
   });
 });
 

@@ -4,7 +4,9 @@ import type { EmergencyCard, EntryRow, PhotoRow, SyncStatus } from '../rows';
 export interface HeldCounts {
   entries: number;
   photos: number;
+  /** Entries that the server refused. */
   refused: number;
+  refusedPhotos: number;
   /** madeAt of the oldest entry held here, ms; null when none is. */
   oldestAt: number | null;
 }
@@ -12,15 +14,16 @@ export interface HeldCounts {
 /** What is still only on this phone. */
 export async function getHeldCounts(db: AccountDatabase): Promise<HeldCounts> {
   const held = await db.entries.where('sync').equals('held').toArray();
-  const [photos, refused] = await Promise.all([
+  const [photos, refused, refusedPhotos] = await Promise.all([
     db.photos.where('sync').equals('held').count(),
     db.entries.where('sync').equals('refused').count(),
+    db.photos.where('sync').equals('refused').count(),
   ]);
   const oldestAt = held.reduce<number | null>(
     (oldest, { madeAt }) => (oldest === null ? madeAt : Math.min(oldest, madeAt)),
     null,
   );
-  return { entries: held.length, photos, refused, oldestAt };
+  return { entries: held.length, photos, refused, refusedPhotos, oldestAt };
 }
 
 /** Entries that the server refused, for the tray. */
