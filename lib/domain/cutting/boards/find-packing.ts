@@ -1,20 +1,18 @@
 import { seededRandom } from '../seeded-random';
 import type { TimeIsUp } from '../run-control';
-import { branch, patternsWithinGap } from './branch-patterns';
 import { Incumbent } from './incumbent';
 import type { PackingProblem } from './packing-problem';
 import type { Packing } from './pattern';
 import { PatternLp } from './pattern-lp';
 import { dive } from './pattern-search';
 import { possibleCosts } from './possible-costs';
+import { MixSearch } from './search-mixes';
 import { quickPacking } from './quick-packing';
 import { SequentialValues } from './sequential-values';
 
 /** Different widths up to which the relaxation is worked out; its basis grows with their square. */
 const MAX_LP_WIDTHS = 700;
 const FIRST_ROUNDS = 16;
-const MAX_PATTERNS = 12_000;
-const FIRST_NODES = 400;
 
 /**
  * The cheapest packing that the time allows, with its bound: quick filling, sequential value correction, then the pattern
@@ -39,37 +37,35 @@ export function findPacking(
   const roundsOf = (count: number) => {
     for (let n = 0; n < count && !isOver(); n++) {
       const { missing, cost } = incumbent.best;
-      const found = values.round([], missing > 0 ? Infinity : cost, isTimeUp);
+      const found = values.round(missing > 0 ? Infinity : cost, isTimeUp);
       if (found) incumbent.offer(found.uses);
     }
   };
   roundsOf(FIRST_ROUNDS);
   if (isOver()) return incumbent;
-  if (problem.widths.length > MAX_LP_WIDTHS) {
-    while (!isOver()) roundsOf(FIRST_ROUNDS);
-    return incumbent;
-  }
-  const relaxation = new PatternLp(problem, mostBoards(incumbent));
-  relaxation.addAll(incumbent.best.uses);
-  const isPriced = relaxation.generate(Int32Array.from(problem.demands), true, incumbent.roundUp, isTimeUp);
-  incumbent.raiseBound(relaxation.rootDuals.bound);
-  let all: PatternLp | undefined;
-  let allFor = Infinity;
+  const relaxation = problem.widths.length <= MAX_LP_WIDTHS ? relax(incumbent, isTimeUp) : undefined;
+  if (relaxation) dive(relaxation, incumbent, 0, random, isOver);
+  const mixes = new MixSearch(incumbent, relaxation, values, random, isOver);
   for (let turn = 0; !isOver(); turn++) {
-    dive(relaxation, incumbent, turn === 0 ? 0 : 0.4, random, isTimeUp);
-    if (isOver()) break;
-    if (isPriced && incumbent.best.missing === 0) {
-      if (incumbent.best.cost < allFor) {
-        allFor = incumbent.best.cost;
-        all = patternsWithinGap(relaxation, incumbent, MAX_PATTERNS);
-      }
-      if (all && branch(all, incumbent, FIRST_NODES * 2 ** turn, isOver) === 'searched')
-        incumbent.raiseBound(incumbent.best.cost);
+    if (relaxation && turn > 0) {
+      dive(relaxation, incumbent, 0.4, random, isOver);
+      values.startFrom(relaxation.worths());
     }
-    values.startFrom(relaxation.worths());
-    roundsOf(FIRST_ROUNDS * 2);
+    roundsOf(FIRST_ROUNDS);
+    if (incumbent.best.missing === 0) mixes.turn(Math.min(turn, 12));
   }
   return incumbent;
+}
+
+/** The relaxation worked out as far as the time allows; its bounds go to the incumbent. */
+function relax(incumbent: Incumbent, isTimeUp: TimeIsUp): PatternLp {
+  const relaxation = new PatternLp(incumbent.problem, mostBoards(incumbent));
+  for (const { pattern } of incumbent.best.uses) relaxation.add(pattern);
+  relaxation.generate(Int32Array.from(incumbent.problem.demands), isTimeUp, (bound) => {
+    incumbent.raiseBound(bound);
+    return incumbent.isProved;
+  });
+  return relaxation;
 }
 
 function mostBoards({ problem, best }: Incumbent): Int32Array {

@@ -1,7 +1,7 @@
 import { FillingTable, type Filling } from './best-filling';
 import { LinearProgram } from './linear-program';
 import type { PackingProblem } from './packing-problem';
-import { patternKey, type Pattern, type PatternUse } from './pattern';
+import { patternKey, type Pattern } from './pattern';
 import type { TimeIsUp } from '../run-control';
 
 /** Share of one cost unit by which a bound must pass a multiple before it is rounded up to the next one. */
@@ -104,25 +104,20 @@ export class PatternLp {
     return true;
   }
 
-  addAll(uses: PatternUse[]): void {
-    for (const { pattern } of uses) this.add(pattern);
-  }
-
   /**
-   * Adds patterns until none would lower the relaxation, or until the bound says all it can.
+   * Adds patterns until none would lower the relaxation.
    *
-   * @param left    how many of each width patterns may still hold; the whole demand at the root
-   * @param atRoot  whether bounds found on the way hold for the whole problem
-   * @param roundUp next cost that a plan can have
+   * @param left     how many of each width patterns may still hold; the whole demand at the root
+   * @param onBound  told of each bound on the whole problem; true ends the work. Left out below the root, where there is none
    * @returns false when the time was up or the solver gave up
    */
-  generate(left: Int32Array, atRoot: boolean, roundUp: (bound: number) => number, isTimeUp: TimeIsUp): boolean {
+  generate(left: Int32Array, isTimeUp: TimeIsUp, onBound?: (bound: number) => boolean): boolean {
     for (;;) {
       if (!this.lp.improve(isTimeUp)) return false;
       const found = this.price(left);
-      if (atRoot) {
+      if (onBound) {
         if (found.bound > this.rootDuals.bound) this.rootDuals = found;
-        if (roundUp(this.rootDuals.bound) >= roundUp(this.lp.value - 1e-7)) return true;
+        if (onBound(found.bound)) return true;
       }
       let added = false;
       for (const pattern of found.patterns) added = this.add(pattern) || added;
@@ -151,7 +146,7 @@ export class PatternLp {
     for (let i = 0; i < worths.length; i++) bound += worths[i]! * demands[i]!;
     kinds.forEach(({ cost, slots: own }, k) => {
       const spare = cost - own.reduce((sum, slot) => sum + slotWorths[slot]!, 0);
-      bound += Math.min(spare * this.lp.lowerOf(this.kindColumn(k)), spare * this.most[k]!);
+      bound += Math.min(spare * this.lp.lowerOf(this.kindColumn(k)), spare * this.lp.upperOf(this.kindColumn(k)));
     });
     const candidates: { pattern: Pattern; gain: number }[] = [];
     slots.forEach(({ room, kind }, slot) => {

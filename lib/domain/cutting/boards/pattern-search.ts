@@ -29,7 +29,7 @@ export function dive(
     lp.setBounds(column, lower, upper);
   };
   while (!isTimeUp() && !incumbent.isProved) {
-    if (!lp.solve(isTimeUp) || !relaxation.generate(left, false, incumbent.roundUp, isTimeUp)) break;
+    if (!lp.solve(isTimeUp) || !relaxation.generate(left, isTimeUp)) break;
     if (incumbent.isBeaten(lp.value - WHOLE)) break;
     const chosen = choose(relaxation, left, fixed, restlessness, random);
     if (chosen.length === 0) break;

@@ -1,16 +1,7 @@
 import { FillingTable } from './best-filling';
 import type { BoardKind, PackingProblem } from './packing-problem';
 import { limitsOf } from './quick-packing';
-import {
-  boardsUsed,
-  packingOf,
-  takeFrom,
-  timesWithin,
-  widthOf,
-  type Packing,
-  type Pattern,
-  type PatternUse,
-} from './pattern';
+import { packingOf, takeFrom, timesWithin, widthOf, type Packing, type Pattern, type PatternUse } from './pattern';
 import type { TimeIsUp } from '../run-control';
 
 /** What a board that costs nothing counts for where its share is passed on to widths. */
@@ -48,21 +39,16 @@ export class SequentialValues {
   }
 
   /**
-   * One plan that goes on from what is fixed.
+   * One plan from at most the given number of boards of each kind.
    *
    * @returns undefined when it was given up: it cost more than `ceiling`, or the time was up
    */
-  round(fixed: PatternUse[], ceiling: number, isTimeUp: TimeIsUp): Packing | undefined {
+  round(ceiling: number, isTimeUp: TimeIsUp, boards = limitsOf(this.problem)): Packing | undefined {
     const { problem } = this;
     const left = Int32Array.from(problem.demands);
-    const limits = limitsOf(problem);
-    const uses = [...fixed];
-    for (const { pattern, times } of fixed) takeFrom(left, pattern.counts, times);
+    const limits = boards.slice();
+    const uses: PatternUse[] = [];
     let cost = 0;
-    boardsUsed(problem, fixed).forEach((boards, kind) => {
-      limits[kind]! -= boards;
-      cost += boards * problem.kinds[kind]!.cost;
-    });
     while (left.some((count) => count > 0)) {
       if (isTimeUp()) return undefined;
       const board = this.bestBoard(left, limits);
