@@ -37,8 +37,8 @@ export function fillMix(problem: PackingProblem, mix: BoardMix, mostNodes: numbe
     const choices: { pattern: Pattern; waste: number }[] = [];
     slots.forEach(({ boundRoom, room }, slot) => {
       if (boards[slot] === 0 || room < widths[longest]!) return;
-      const found = fullPatterns(widths, left, room, longest, boundRoom - spare, MAX_FILLINGS);
-      if (found.length === MAX_FILLINGS) isComplete = false;
+      const { found, isAll } = fullPatterns(widths, left, room, longest, boundRoom - spare, MAX_FILLINGS);
+      if (!isAll) isComplete = false;
       for (const counts of found)
         choices.push({ pattern: { slot, counts }, waste: boundRoom - widthOf(problem, counts) });
     });

@@ -37,7 +37,7 @@ export function improveOffcuts(problem: PackingProblem, boards: FilledBoard[]): 
     for (let a = 0; a < boards.length; a++)
       for (let b = 0; b < boards.length; b++) {
         if (a === b || (boards[a]!.contents.length === 1 && hasSameContents(boards[a]!, boards[b]!))) continue;
-        work += largest + 100 * problem.widths.length;
+        work += 8 * largest + 100 * problem.widths.length;
         if (work > MAX_WORK) return boards;
         if (fillFrom(problem, table, boards[a]!, boards[b]!)) moved = true;
       }

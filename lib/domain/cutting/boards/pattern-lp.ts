@@ -99,8 +99,8 @@ export class PatternLp {
     rows.push(this.widthCount + pattern.slot);
     entries.push(-1);
     this.patterns.push(pattern);
-    const { kind } = this.problem.slots[pattern.slot]!;
-    this.lp.addColumn(0, rows, entries, 0, Math.min(useful, this.most[kind]!));
+    // One more than can be of use: at a bound that holds, the duals would leave out what the bound is worth.
+    this.lp.addColumn(0, rows, entries, 0, useful + 1);
     return true;
   }
 
