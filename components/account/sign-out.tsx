@@ -34,7 +34,7 @@ export function SignOut({ accountId }: { accountId: string }) {
     setStage({ at: 'working' });
     try {
       const held = await heldHere(accountId);
-      if (held.entries + held.photos + held.refused > 0) setStage({ at: 'held', held });
+      if (held.entries + held.photos + held.refused + held.refusedPhotos > 0) setStage({ at: 'held', held });
       else await leave('empty');
     } catch (error) {
       setStage({ at: 'unknown', words: error instanceof Error ? error.message : String(error) });
@@ -114,10 +114,10 @@ async function leaveHere(accountId: string): Promise<void> {
 }
 
 /** "12 entries and 2 photos" */
-function heldWords({ entries, photos, refused }: HeldCounts): string {
+function heldWords({ entries, photos, refused, refusedPhotos }: HeldCounts): string {
   const parts = [
     [entries + refused, 'entry', 'entries'],
-    [photos, 'photo', 'photos'],
+    [photos + refusedPhotos, 'photo', 'photos'],
   ] as const;
   return parts
     .filter(([count]) => count > 0)

@@ -2,6 +2,7 @@ import { gzipSync } from 'node:zlib';
 import { readFileSync } from 'node:fs';
 import { chromium, type BrowserContext, type Page } from '@playwright/test';
 import type { PlanDocument } from '@/lib/domain/plan/document';
+import { post } from '@/tests/e2e/support/builds';
 import { signIn, takeToBench } from '@/tests/e2e/support/people';
 import { Program } from '@/tests/e2e/support/program';
 
@@ -74,21 +75,6 @@ async function startLongBuild(page: Page): Promise<string> {
     JSON.stringify({ planId, name: BUILD_NAME }),
   );
   return buildId;
-}
-
-function post<T>(page: Page, path: string, body: string): Promise<T> {
-  return page.evaluate(
-    async ([to, text]) => {
-      const answer = await fetch(to!, {
-        method: 'POST',
-        headers: { 'content-type': 'application/json', 'x-holdfast': '1' },
-        body: text,
-      });
-      if (!answer.ok) throw new Error(await answer.text());
-      return (await answer.json()) as T;
-    },
-    [path, body],
-  );
 }
 
 async function slowPage(context: BrowserContext, rate: number): Promise<Page> {

@@ -1,4 +1,5 @@
 import { expect, test, type Page } from '@playwright/test';
+import { entriesOnPhone, recordsOnPhone } from './support/phone-records';
 import { phonePhoto } from './support/photos';
 import { signIn, signUp, takeToBench } from './support/people';
 import { Program } from './support/program';
@@ -234,30 +235,5 @@ async function measure(page: Page, what: string, text: string): Promise<void> {
   await expect(page.getByRole('list', { name: 'Measured' }).getByText(what)).toBeVisible();
 }
 
-interface LocalEntry {
-  id: string;
-  sync: string;
-  position: number | null;
-}
-
-function readAll<T>(page: Page, store: string): Promise<T[]> {
-  return page.evaluate(async (name) => {
-    const found = (await indexedDB.databases()).find((each) => /^holdfast-[0-9a-f]{8}-/.test(each.name ?? ''));
-    const db = await new Promise<IDBDatabase>((resolve, reject) => {
-      const request = indexedDB.open(found!.name!);
-      request.onsuccess = () => resolve(request.result);
-      request.onerror = () => reject(request.error);
-    });
-    const rows = await new Promise<unknown[]>((resolve, reject) => {
-      const request = db.transaction(name).objectStore(name).getAll();
-      request.onsuccess = () => resolve(request.result as unknown[]);
-      request.onerror = () => reject(request.error);
-    });
-    db.close();
-    return rows;
-  }, store) as Promise<T[]>;
-}
-
-const entriesOnPhone = (page: Page) => readAll<LocalEntry>(page, 'entries');
 const stateOnPhone = async (page: Page, buildId: string) =>
-  (await readAll<{ id: string; state: unknown }>(page, 'builds')).find(({ id }) => id === buildId)!.state;
+  (await recordsOnPhone<{ id: string; state: unknown }>(page, 'builds')).find(({ id }) => id === buildId)!.state;

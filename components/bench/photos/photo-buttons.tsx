@@ -50,6 +50,7 @@ export function PhotoButtons({ stepId, wantedId = null, of }: PhotoButtonsProps)
   async function take(input: HTMLInputElement) {
     const file = input.files?.[0];
     if (!file) return;
+    setTrouble(null);
     setBusy(true);
     try {
       const { preparePhoto } = await import('@/lib/device/photo');
