@@ -24,16 +24,15 @@ export function fillMix(problem: PackingProblem, mix: BoardMix, mostNodes: numbe
   const failed = new Set<string>();
   const uses: PatternUse[] = [];
   let isComplete = slots.every(({ room, boundRoom }) => room === boundRoom);
+  let isStopped = false;
   let nodes = 0;
   const visit = (spare: number): boolean => {
     const longest = left.findIndex((count) => count > 0);
     if (longest < 0) return true;
     const key = `${left.join()}|${boards.join()}`;
     if (failed.has(key)) return false;
-    if (++nodes > mostNodes || ((nodes & 15) === 0 && isTimeUp())) {
-      isComplete = false;
-      return false;
-    }
+    if (++nodes > mostNodes || isTimeUp()) isStopped = true;
+    if (isStopped) return false;
     const choices: { pattern: Pattern; waste: number }[] = [];
     slots.forEach(({ boundRoom, room }, slot) => {
       if (boards[slot] === 0 || room < widths[longest]!) return;
@@ -51,11 +50,11 @@ export function fillMix(problem: PackingProblem, mix: BoardMix, mostNodes: numbe
       uses.pop();
       boards[pattern.slot]!++;
       takeFrom(left, pattern.counts, -1);
-      if (nodes > mostNodes) return false;
+      if (isStopped) return false;
     }
     if (failed.size < MAX_REMEMBERED) failed.add(key);
     return false;
   };
   if (visit(mix.spare)) return { found: uses };
-  return isComplete ? 'impossible' : 'unknown';
+  return isComplete && !isStopped ? 'impossible' : 'unknown';
 }

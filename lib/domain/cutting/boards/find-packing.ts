@@ -5,14 +5,16 @@ import type { PackingProblem } from './packing-problem';
 import type { Packing } from './pattern';
 import { PatternLp } from './pattern-lp';
 import { dive } from './pattern-search';
-import { possibleCosts } from './possible-costs';
+import { fillMix } from './fill-mix';
 import { MixSearch } from './search-mixes';
-import { quickPacking } from './quick-packing';
+import { limitsOf, quickPacking } from './quick-packing';
 import { SequentialValues } from './sequential-values';
 
 /** Different widths up to which the relaxation is worked out; its basis grows with their square. */
 const MAX_LP_WIDTHS = 700;
 const FIRST_ROUNDS = 16;
+/** Once it is known that the boards do not suffice, only so much is done to place as much as possible. */
+const TURNS_WHEN_SHORT = 3;
 
 /**
  * The cheapest packing that the time allows, with its bound: quick filling, sequential value correction, then the pattern
@@ -29,7 +31,6 @@ export function findPacking(
   const first = quickPacking(problem, isTimeUp);
   const incumbent = new Incumbent(problem, first, onBetter);
   onBetter(first);
-  if (first.missing === 0) incumbent.roundUp = possibleCosts(problem, first.cost);
   incumbent.raiseBound(0);
   const isOver = () => incumbent.isProved || isTimeUp();
   if (isOver()) return incumbent;
@@ -46,15 +47,32 @@ export function findPacking(
   const relaxation = problem.widths.length <= MAX_LP_WIDTHS ? relax(incumbent, isTimeUp) : undefined;
   if (relaxation) dive(relaxation, incumbent, 0, random, isOver);
   const mixes = new MixSearch(incumbent, relaxation, values, random, isOver);
+  let isShort = false;
   for (let turn = 0; !isOver(); turn++) {
     if (relaxation && turn > 0) {
       dive(relaxation, incumbent, 0.4, random, isOver);
       values.startFrom(relaxation.worths());
     }
     roundsOf(FIRST_ROUNDS);
-    if (incumbent.best.missing === 0) mixes.turn(Math.min(turn, 12));
+    incumbent.raiseBound(0);
+    const effort = Math.min(turn, 12);
+    if (incumbent.best.missing === 0) mixes.turn(effort);
+    else if (!isShort) isShort = tryAllBoards(incumbent, effort, isTimeUp);
+    else if (turn > TURNS_WHEN_SHORT) break;
   }
   return incumbent;
+}
+
+/** Tries to place everything on all the boards there are. @returns true when that is impossible */
+function tryAllBoards(incumbent: Incumbent, effort: number, isTimeUp: TimeIsUp): boolean {
+  const { problem } = incumbent;
+  const boards = limitsOf(problem);
+  const room = problem.slots.reduce((sum, { boundRoom, kind }) => sum + boundRoom * boards[kind]!, 0);
+  const needed = problem.widths.reduce((sum, width, i) => sum + width * problem.demands[i]!, 0);
+  if (room < needed) return true;
+  const answer = fillMix(problem, { boards, cost: 0, spare: room - needed }, 500 * 4 ** effort, isTimeUp);
+  if (typeof answer !== 'string') incumbent.offer(answer.found);
+  return answer === 'impossible';
 }
 
 /** The relaxation worked out as far as the time allows; its bounds go to the incumbent. */

@@ -1,12 +1,13 @@
 import { isCheaper, packingOf, type Packing, type PatternUse } from './pattern';
 import type { PackingProblem } from './packing-problem';
-import type { RoundUp } from './possible-costs';
+import { possibleCosts, type RoundUp } from './possible-costs';
 
 /** The best plan so far and the best bound, in cost units. */
 export class Incumbent {
-  /** No plan costs less; a cost that a plan can have. */
+  /** No plan costs less; a cost that a plan can have. 0 until everything has a place. */
   lowerBound = 0;
-  roundUp: RoundUp = Math.ceil;
+  private highest = 0;
+  private roundUp: RoundUp | undefined;
 
   constructor(
     readonly problem: PackingProblem,
@@ -23,8 +24,12 @@ export class Incumbent {
     return true;
   }
 
+  /** Takes note of a bound on every plan; it counts once there is a plan that places everything. */
   raiseBound(bound: number): void {
-    this.lowerBound = Math.max(this.lowerBound, Math.min(this.best.cost, this.roundUp(bound)));
+    this.highest = Math.max(this.highest, bound);
+    if (this.best.missing > 0) return;
+    this.roundUp ??= possibleCosts(this.problem, this.best.cost);
+    this.lowerBound = Math.max(this.lowerBound, Math.min(this.best.cost, this.roundUp(this.highest)));
   }
 
   get isProved(): boolean {
@@ -33,7 +38,9 @@ export class Incumbent {
 
   /** True when no plan above this bound can be cheaper than the best. */
   isBeaten(bound: number): boolean {
-    return this.best.missing === 0 && this.roundUp(bound) >= this.best.cost;
+    if (this.best.missing > 0) return false;
+    this.roundUp ??= possibleCosts(this.problem, this.best.cost);
+    return this.roundUp(bound) >= this.best.cost;
   }
 
   private isAllowed({ boards }: Packing): boolean {

@@ -7,13 +7,6 @@ import type { TimeIsUp } from '../run-control';
 /** Share of one cost unit by which a bound must pass a multiple before it is rounded up to the next one. */
 export const ROUNDING_MARGIN = 1e-6;
 
-interface Pricing {
-  patterns: Pattern[];
-  bound: number;
-  worths: Float64Array;
-  slotWorths: Float64Array;
-}
-
 /**
  * The pattern relaxation (Gilmore and Gomory 1961) with one column for the number of boards of each kind: patterns cost
  * nothing themselves but may not outnumber the boards of their kind. Only patterns that no demand exceeds are made,
@@ -24,13 +17,6 @@ interface Pricing {
 export class PatternLp {
   readonly lp: LinearProgram;
   readonly patterns: Pattern[] = [];
-  /** The duals that gave the best bound: worth of each width, and of the best pattern of each slot. */
-  rootDuals: Pricing = {
-    patterns: [],
-    bound: -Infinity,
-    worths: new Float64Array(0),
-    slotWorths: new Float64Array(0),
-  };
   private readonly known = new Set<string>();
   private readonly firstKind: number;
   private readonly firstPattern: number;
@@ -108,17 +94,15 @@ export class PatternLp {
    * Adds patterns until none would lower the relaxation.
    *
    * @param left     how many of each width patterns may still hold; the whole demand at the root
-   * @param onBound  told of each bound on the whole problem; true ends the work. Left out below the root, where there is none
+   * @param onBound  told of each bound on plans within the present bounds of the kinds, which holds when `left` is the
+   *   whole demand; true ends the work
    * @returns false when the time was up or the solver gave up
    */
   generate(left: Int32Array, isTimeUp: TimeIsUp, onBound?: (bound: number) => boolean): boolean {
     for (;;) {
       if (!this.lp.improve(isTimeUp)) return false;
       const found = this.price(left);
-      if (onBound) {
-        if (found.bound > this.rootDuals.bound) this.rootDuals = found;
-        if (onBound(found.bound)) return true;
-      }
+      if (onBound?.(found.bound)) return true;
       let added = false;
       for (const pattern of found.patterns) added = this.add(pattern) || added;
       if (!added) return true;
@@ -131,7 +115,7 @@ export class PatternLp {
    * bound every plan from below once each kind's dearest pattern is known. Duals are rounded to a power of two so that
    * all sums are exact.
    */
-  private price(left: Int32Array): Pricing {
+  private price(left: Int32Array): { patterns: Pattern[]; bound: number } {
     const { kinds, demands, slots } = this.problem;
     const worths = this.worths();
     const fill = this.table.fill(worths, left);
@@ -155,23 +139,7 @@ export class PatternLp {
       if (gain > 1e-8 * Math.max(1, kinds[kind]!.cost)) candidates.push({ pattern: { slot, counts }, gain });
     });
     candidates.sort((a, b) => b.gain - a.gain || a.pattern.slot - b.pattern.slot);
-    return { patterns: candidates.map(({ pattern }) => pattern), bound, worths, slotWorths };
-  }
-
-  /**
-   * Bound on any plan made of these patterns within the present bounds, by weak duality from the present duals: each
-   * column at the bound that its reduced cost prefers.
-   */
-  boundOfNode(): number {
-    const { lp, problem, widthCount } = this;
-    for (let r = 0; r < lp.rows; r++) lp.duals[r] = Math.max(0, lp.duals[r]!);
-    let bound = 0;
-    for (let i = 0; i < widthCount; i++) bound += lp.duals[i]! * problem.demands[i]!;
-    for (let column = this.firstKind; column < lp.columns; column++) {
-      const reduced = lp.reducedCost(column);
-      bound += reduced * (reduced > 0 ? lp.lowerOf(column) : lp.upperOf(column));
-    }
-    return bound;
+    return { patterns: candidates.map(({ pattern }) => pattern), bound };
   }
 
   /** Duals of the widths as exact sums need them. */
