@@ -1,5 +1,6 @@
 export { checkBoardPlan } from './boards/check-board-plan';
 export { planBoards } from './boards/plan-boards';
+export { remainderOf, replanBoards, type BoardReplan, type BoardsUnderWay } from './boards/replan-boards';
 export type {
   AvoidedStretch,
   BoardCut,

@@ -32,15 +32,29 @@ export function clearStretches(
 }
 
 /**
- * The same stretches with at least one kerf between neighbours. The room is taken from the later stretch. Splitting it
- * otherwise can, for a defect narrower than the blade, save at most one kerf; bounds are computed without this loss, so
- * a plan is never called proved because of it.
+ * The same stretches with at least one kerf between neighbours. Where the wood to avoid is narrower than the kerf, the
+ * room is taken from the shorter neighbour, so that the longest stretch of a board stays whole; a stretch that has none
+ * left becomes empty. Sharing it out otherwise can, for a defect narrower than the blade, save at most one kerf; bounds
+ * are computed without this loss, so a plan is never called proved because of it.
  */
-export function keepKerfBetween(stretches: ClearStretch[], kerf: Length): ClearStretch[] {
-  let free = Number.NEGATIVE_INFINITY;
-  return stretches.map(({ start, end }) => {
-    const from = Math.max(start, free);
-    free = Math.max(end, from) + kerf;
-    return { start: from, end: Math.max(end, from) };
-  });
+export function keepKerfBetween(stretches: readonly ClearStretch[], kerf: Length): ClearStretch[] {
+  const apart = stretches.map((stretch) => ({ ...stretch }));
+  const used = [...apart];
+  for (let i = 0; i + 1 < used.length;) {
+    const [left, right] = [used[i]!, used[i + 1]!];
+    const short = kerf - (right.start - left.end);
+    if (short <= 0) {
+      i++;
+      continue;
+    }
+    const isLeft = left.end - left.start < right.end - right.start;
+    if (isLeft) left.end = Math.max(left.start, left.end - short);
+    else right.start = Math.min(right.end, right.start + short);
+    const shortened = isLeft ? left : right;
+    if (shortened.start === shortened.end) {
+      used.splice(isLeft ? i : i + 1, 1);
+      i = Math.max(0, i - 1);
+    }
+  }
+  return apart;
 }

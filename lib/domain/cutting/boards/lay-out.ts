@@ -38,7 +38,8 @@ export function layOut(
     const { stock, slots } = problem.kinds[board.kind]!;
     const cuts = board.contents.flatMap((counts, s): BoardCut[] => {
       let at = problem.slots[slots[s]!]!.stretch.start;
-      const parts = Array.from(counts, (count, i) => (count > 0 ? takeParts(i, count) : [])).flat();
+      const parts: BoardPart[] = [];
+      for (let i = 0; i < counts.length; i++) if (counts[i]! > 0) parts.push(...takeParts(i, counts[i]!));
       parts.sort((a, b) => Number(a.reserve !== undefined) - Number(b.reserve !== undefined));
       return parts.map((part) => {
         const cut = { partId: part.id, start: at, end: at + lengthTaken(part) };

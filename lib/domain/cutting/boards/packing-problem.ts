@@ -69,7 +69,7 @@ export function packingProblem(request: BoardRequest, parts: BoardPart[]): Packi
   const shortest = (rows.at(-1)?.[0] ?? kerf + 1) - kerf;
   const isPriced = request.stock.some(({ price }) => price !== undefined);
   const costOf = (stock: BoardStock) => (isPriced ? (stock.price ?? 0) : stock.length);
-  const room = ({ start, end }: ClearStretch) => Math.floor((end - start + kerf) / step);
+  const room = ({ start, end }: ClearStretch) => (end > start ? Math.floor((end - start + kerf) / step) : 0);
   const kinds: BoardKind[] = [];
   const slots: Slot[] = [];
   for (const stock of request.stock) {
