@@ -1,3 +1,6 @@
+import { BasisInverse } from './basis-inverse';
+import { SparseColumns } from './sparse-columns';
+
 const FEASIBLE = 1e-7;
 const PIVOT = 1e-9;
 const REFACTOR_EVERY = 80;
@@ -16,22 +19,19 @@ const BASIC = 2;
  */
 export class LinearProgram {
   readonly rows: number;
-  columns = 0;
-  /** Basic values are inside the solution; see {@link valueOf}. */
+  /** Cost of the present solution; see {@link valueOf} for the solution itself. */
   value = 0;
   readonly duals: Float64Array;
-  private readonly inverse: Float64Array;
+  private readonly inverse: BasisInverse;
+  private readonly matrix = new SparseColumns();
   private readonly head: Int32Array;
   private readonly basic: Float64Array;
   private readonly direction: Float64Array;
-  private cost: number[] = [];
-  private lower: number[] = [];
-  private upper: number[] = [];
-  private place: number[] = [];
-  private row: number[] = [];
-  private start: number[] = [0];
-  private index: number[] = [];
-  private entry: number[] = [];
+  private readonly cost: number[] = [];
+  private readonly lower: number[] = [];
+  private readonly upper: number[] = [];
+  private readonly place: number[] = [];
+  private readonly row: number[] = [];
   private pivots = 0;
 
   constructor(
@@ -42,14 +42,13 @@ export class LinearProgram {
     const rows = rightHand.length;
     this.rows = rows;
     this.duals = new Float64Array(rows);
-    this.inverse = new Float64Array(rows * rows);
+    this.inverse = new BasisInverse(rows);
     this.head = new Int32Array(rows);
     this.basic = new Float64Array(rows);
     this.direction = new Float64Array(rows);
     for (let r = 0; r < rows; r++) {
       this.addColumn(penalties[r]!, [r], [1], 0, 1e9);
       this.enterBasis(r, r);
-      this.inverse[r * rows + r] = 1;
     }
     for (let r = 0; r < rows; r++) this.addColumn(0, [r], [-1], 0, 1e9);
     this.refreshValues();
@@ -62,12 +61,11 @@ export class LinearProgram {
     this.upper.push(upper);
     this.place.push(AT_LOWER);
     this.row.push(-1);
-    for (let k = 0; k < rows.length; k++) {
-      this.index.push(rows[k]!);
-      this.entry.push(entries[k]!);
-    }
-    this.start.push(this.index.length);
-    return this.columns++;
+    return this.matrix.add(rows, entries);
+  }
+
+  get columns(): number {
+    return this.matrix.count;
   }
 
   setBounds(column: number, lower: number, upper: number): void {
@@ -91,10 +89,7 @@ export class LinearProgram {
 
   /** Cost of a column less the worth of what it covers. */
   reducedCost(column: number): number {
-    let reduced = this.cost[column]!;
-    for (let k = this.start[column]!; k < this.start[column + 1]!; k++)
-      reduced -= this.duals[this.index[k]!]! * this.entry[k]!;
-    return reduced;
+    return this.cost[column]! - this.matrix.dot(column, this.duals);
   }
 
   /** After bounds moved: dual simplex, then primal for what is left. @returns false when it gave up */
@@ -219,9 +214,7 @@ export class LinearProgram {
     for (let j = 0; j < this.columns; j++) {
       const place = this.place[j]!;
       if (place === BASIC || this.upper[j]! - this.lower[j]! < FEASIBLE) continue;
-      let slope = 0;
-      for (let k = this.start[j]!; k < this.start[j + 1]!; k++)
-        slope += this.inverse[base + this.index[k]!]! * this.entry[k]!;
+      const slope = this.matrix.dot(j, this.inverse.values, base);
       const useful = tooSmall === (place === AT_LOWER) ? -slope : slope;
       if (useful < 1e-8) continue;
       const ratio = Math.abs(this.reducedCost(j)) / useful;
@@ -234,13 +227,7 @@ export class LinearProgram {
   }
 
   private computeDirection(column: number): void {
-    const { rows, inverse, direction } = this;
-    direction.fill(0);
-    for (let k = this.start[column]!; k < this.start[column + 1]!; k++) {
-      const at = this.index[k]!;
-      const entry = this.entry[k]!;
-      for (let r = 0; r < rows; r++) direction[r]! += inverse[r * rows + at]! * entry;
-    }
+    this.matrix.transform(column, this.inverse.values, this.rows, this.direction);
   }
 
   private enterBasis(row: number, column: number): void {
@@ -250,60 +237,20 @@ export class LinearProgram {
   }
 
   private pivot(row: number, entering: number, value: number, toUpper: boolean): void {
-    const { rows, inverse, direction } = this;
     const leaving = this.head[row]!;
     this.place[leaving] = toUpper ? AT_UPPER : AT_LOWER;
     this.row[leaving] = -1;
     this.enterBasis(row, entering);
     this.basic[row] = value;
-    const base = row * rows;
-    const scale = 1 / direction[row]!;
-    for (let c = 0; c < rows; c++) inverse[base + c]! *= scale;
-    for (let r = 0; r < rows; r++) {
-      const factor = direction[r]!;
-      if (r === row || factor === 0) continue;
-      const other = r * rows;
-      for (let c = 0; c < rows; c++) inverse[other + c]! -= factor * inverse[base + c]!;
-    }
-    if (++this.pivots % REFACTOR_EVERY === 0) this.refactor();
-  }
-
-  /** The inverse made afresh from the basis, so that rounding does not build up (Gauss-Jordan, largest pivot). */
-  private refactor(): void {
-    const { rows, inverse } = this;
-    const width = 2 * rows;
-    const work = new Float64Array(rows * width);
-    for (let c = 0; c < rows; c++) {
-      const column = this.head[c]!;
-      for (let k = this.start[column]!; k < this.start[column + 1]!; k++)
-        work[this.index[k]! * width + c] = this.entry[k]!;
-      work[c * width + rows + c] = 1;
-    }
-    for (let c = 0; c < rows; c++) {
-      let best = c;
-      for (let r = c + 1; r < rows; r++)
-        if (Math.abs(work[r * width + c]!) > Math.abs(work[best * width + c]!)) best = r;
-      if (Math.abs(work[best * width + c]!) < 1e-11) return;
-      if (best !== c)
-        for (let k = c; k < width; k++) {
-          const swap = work[c * width + k]!;
-          work[c * width + k] = work[best * width + k]!;
-          work[best * width + k] = swap;
-        }
-      const scale = 1 / work[c * width + c]!;
-      for (let k = c; k < width; k++) work[c * width + k]! *= scale;
-      for (let r = 0; r < rows; r++) {
-        const factor = work[r * width + c]!;
-        if (r === c || factor === 0) continue;
-        for (let k = c; k < width; k++) work[r * width + k]! -= factor * work[c * width + k]!;
-      }
-    }
-    for (let r = 0; r < rows; r++) for (let c = 0; c < rows; c++) inverse[r * rows + c] = work[r * width + rows + c]!;
+    this.inverse.replace(row, this.direction);
+    if (++this.pivots % REFACTOR_EVERY !== 0) return;
+    this.inverse.rebuild(this.matrix, this.head);
     this.refreshValues();
   }
 
   private refreshDuals(): void {
-    const { rows, inverse, duals } = this;
+    const { rows, duals } = this;
+    const inverse = this.inverse.values;
     duals.fill(0);
     for (let r = 0; r < rows; r++) {
       const cost = this.cost[this.head[r]!]!;
@@ -313,13 +260,14 @@ export class LinearProgram {
   }
 
   private refreshValues(): void {
-    const { rows, inverse, basic } = this;
+    const { rows, basic } = this;
+    const inverse = this.inverse.values;
     const left = Float64Array.from(this.rightHand);
     for (let j = 0; j < this.columns; j++) {
       if (this.place[j] === BASIC) continue;
       const value = this.place[j] === AT_UPPER ? this.upper[j]! : this.lower[j]!;
       if (value === 0) continue;
-      for (let k = this.start[j]!; k < this.start[j + 1]!; k++) left[this.index[k]!]! -= this.entry[k]! * value;
+      this.matrix.addTo(j, left, -value);
     }
     for (let r = 0; r < rows; r++) {
       let sum = 0;
