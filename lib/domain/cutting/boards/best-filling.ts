@@ -1,7 +1,9 @@
 /** Table cells of one dynamic programme at most; past it fillings are found by a bounded search. */
 const MAX_CELLS = 24_000_000;
+/** Up to so many the table is quicker than any search. */
+const QUICK_CELLS = 1_500_000;
 /** Nodes of one bounded search at most. */
-const MAX_NODES = 40_000;
+const MAX_NODES = 10_000;
 /** Widths on one board at most in a bounded search, so that it never runs out of stack. */
 const MAX_DEPTH = 500;
 
@@ -13,15 +15,17 @@ export interface Filling {
   atMost: number;
 }
 
-/** Best fillings for one set of worths and limits, for any room up to the one they were made for. */
-export type BestFilling = (room: number) => Filling;
+/**
+ * Best fillings for one set of worths and limits, for any room up to the one they were made for. Where a table would be
+ * slow, a filling worth more than `enough` is taken without looking for the best.
+ */
+export type BestFilling = (room: number, enough?: number) => Filling;
 
 /**
  * The bounded knapsack: at most `limits[i]` pieces of width i, each worth `worths[i]`.
  *
  * One dynamic programme over room answers every room at once; limits are split into powers of two. Where the table
- * would be too large it is a depth-first search by worth per width instead, whose `atMost` stays valid when it is cut
- * short. Sums of worths are exact when the caller rounds worths to a common power of two.
+ * would be large a depth-first search by worth per width comes first, whose `atMost` stays valid when it is cut short. Sums of worths are exact when the caller rounds worths to a common power of two.
  */
 export class FillingTable {
   private readonly best: Float64Array;
@@ -37,10 +41,17 @@ export class FillingTable {
   /** The answer is valid until the next call. */
   fill(worths: ArrayLike<number>, limits: ArrayLike<number>): BestFilling {
     const rows = this.splitLimits(worths, limits);
-    const fits = this.best.length > 0 && rows.length * (this.maxRoom + 1) <= MAX_CELLS;
-    if (fits) return this.tabulate(rows, worths);
+    const cells = rows.length * (this.maxRoom + 1);
+    if (this.best.length > 0 && cells <= QUICK_CELLS) return this.tabulate(rows, worths);
     const order = this.byWorthPerWidth(worths, limits);
-    return (room) => this.search(room, worths, limits, order);
+    const fits = this.best.length > 0 && cells <= MAX_CELLS;
+    let table: BestFilling | undefined;
+    return (room, enough = Infinity) => {
+      const searched = this.search(room, worths, limits, order);
+      if (!fits || searched.value === searched.atMost || searched.value > enough) return searched;
+      table ??= this.tabulate(rows, worths);
+      return table(room);
+    };
   }
 
   private splitLimits(worths: ArrayLike<number>, limits: ArrayLike<number>): { i: number; times: number }[] {

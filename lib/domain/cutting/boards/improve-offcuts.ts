@@ -5,7 +5,7 @@ import { widthOf, type Packing } from './pattern';
 /** Room steps walked at most, so that the answer depends on the plan alone and not on the clock. */
 const MAX_WORK = 40_000_000;
 
-/** One board of a plan with what lies in each of its slots. */
+/** One board of a plan with what lies in each of its slots; counts may be shared and are replaced, never changed. */
 export interface FilledBoard {
   kind: number;
   contents: Int32Array[];
@@ -15,7 +15,7 @@ export interface FilledBoard {
 export function boardsOf(problem: PackingProblem, packing: Packing): FilledBoard[] {
   const perSlot: Int32Array[][] = problem.slots.map(() => []);
   for (const { pattern, times } of packing.uses)
-    for (let n = 0; n < times; n++) perSlot[pattern.slot]!.push(pattern.counts.slice());
+    for (let n = 0; n < times; n++) perSlot[pattern.slot]!.push(pattern.counts);
   return problem.kinds.flatMap(({ slots }, kind) =>
     Array.from({ length: packing.boards[kind]! }, (_, n) => ({
       kind,

@@ -34,7 +34,7 @@ export function layOut(
     }
     return taken;
   };
-  const planned = [...boards].sort(compareBoards).map((board): PlannedBoard => {
+  const planned = inCuttingOrder(boards).map((board): PlannedBoard => {
     const { stock, slots } = problem.kinds[board.kind]!;
     const cuts = board.contents.flatMap((counts, s): BoardCut[] => {
       let at = problem.slots[slots[s]!]!.stretch.start;
@@ -52,13 +52,20 @@ export function layOut(
   return { boards: planned, placed };
 }
 
-/** Same kind together, then those that begin with the longest parts. */
-function compareBoards(a: FilledBoard, b: FilledBoard): number {
-  if (a.kind !== b.kind) return a.kind - b.kind;
-  for (let s = 0; s < a.contents.length; s++)
-    for (let i = 0; i < a.contents[s]!.length; i++) {
-      const difference = b.contents[s]![i]! - a.contents[s]![i]!;
-      if (difference !== 0) return difference;
-    }
-  return 0;
+/** Same kind together, then those that begin with the longest parts, then those with most of them. */
+function inCuttingOrder(boards: FilledBoard[]): FilledBoard[] {
+  const keyed = boards.map((board) => {
+    const key = [board.kind];
+    board.contents.forEach((counts, s) => {
+      for (let i = 0; i < counts.length; i++) if (counts[i]! > 0) key.push(s * counts.length + i, -counts[i]!);
+    });
+    return { board, key };
+  });
+  return keyed.sort((a, b) => compareLists(a.key, b.key)).map(({ board }) => board);
+}
+
+/** The first difference decides; of two that agree as far as they go the longer comes first. */
+function compareLists(a: number[], b: number[]): number {
+  for (let k = 0; k < Math.min(a.length, b.length); k++) if (a[k] !== b[k]) return a[k]! - b[k]!;
+  return b.length - a.length;
 }

@@ -1,11 +1,12 @@
 import { FillingTable, type Filling } from './best-filling';
 import { LinearProgram } from './linear-program';
 import type { PackingProblem } from './packing-problem';
-import { patternKey, type Pattern } from './pattern';
+import { patternKey, takeFrom, timesWithin, type Pattern } from './pattern';
 import type { TimeIsUp } from '../run-control';
 
 /** Share of one cost unit by which a bound must pass a multiple before it is rounded up to the next one. */
 export const ROUNDING_MARGIN = 1e-6;
+const COMPLEMENTS = 4;
 
 /**
  * The pattern relaxation (Gilmore and Gomory 1961) with one column for the number of boards of each kind: patterns cost
@@ -120,12 +121,14 @@ export class PatternLp {
     const worths = this.worths();
     const fill = this.table.fill(worths, left);
     const known = new Map<number, Filling>();
-    const fillOnce = (room: number) => {
-      const filling = known.get(room) ?? fill(room);
+    const fillOnce = (room: number, enough?: number) => {
+      const filling = known.get(room) ?? fill(room, enough);
       known.set(room, filling);
       return filling;
     };
-    const slotWorths = Float64Array.from(slots, ({ boundRoom }) => fillOnce(boundRoom).atMost);
+    // A filling worth more than its slot is a pattern to add; only once there is none must the best be known.
+    const enough = (slot: number) => Math.max(0, this.lp.duals[this.widthCount + slot]!) * 1.0001;
+    const slotWorths = Float64Array.from(slots, ({ boundRoom }, slot) => fillOnce(boundRoom, enough(slot)).atMost);
     let bound = 0;
     for (let i = 0; i < worths.length; i++) bound += worths[i]! * demands[i]!;
     kinds.forEach(({ cost, slots: own }, k) => {
@@ -138,8 +141,27 @@ export class PatternLp {
       const gain = value - Math.max(0, this.lp.duals[this.widthCount + slot]!);
       if (gain > 1e-8 * Math.max(1, kinds[kind]!.cost)) candidates.push({ pattern: { slot, counts }, gain });
     });
+    if (slots.length === 1 && candidates.length > 0) this.addComplements(candidates, left, worths);
     candidates.sort((a, b) => b.gain - a.gain || a.pattern.slot - b.pattern.slot);
     return { patterns: candidates.map(({ pattern }) => pattern), bound };
+  }
+
+  /** With one slot, also the best patterns of what the patterns so far leave over: they go together in a plan. */
+  private addComplements(
+    candidates: { pattern: Pattern; gain: number }[],
+    left: Int32Array,
+    worths: Float64Array,
+  ): void {
+    const [slot] = this.problem.slots;
+    const least = Math.max(0, this.lp.duals[this.widthCount]!);
+    const rest = left.slice();
+    for (let n = 0; n < COMPLEMENTS; n++) {
+      const { counts } = candidates.at(-1)!.pattern;
+      takeFrom(rest, counts, Math.max(1, timesWithin(counts, rest)));
+      const { counts: next, value } = this.table.fill(worths, rest)(slot!.room, 0);
+      if (value - least <= 1e-8) return;
+      candidates.push({ pattern: { slot: 0, counts: next }, gain: value - least });
+    }
   }
 
   /** Duals of the widths as exact sums need them. */

@@ -85,7 +85,7 @@ export class SequentialValues {
     kinds.forEach((kind, k) => {
       if (limits[k]! === 0 || kind.slots.length > 1) return;
       const slot = kind.slots[0]!;
-      const { counts, value } = fill(slots[slot]!.room);
+      const { counts, value } = fill(slots[slot]!.room, 0);
       offer(k, [{ slot, counts }], counts, value);
     });
     kinds.forEach((kind, k) => {
@@ -94,7 +94,7 @@ export class SequentialValues {
       const all = new Int32Array(widths.length);
       let sum = 0;
       const patterns = kind.slots.map((slot) => {
-        const { counts, value } = this.table.fill(this.values, rest)(slots[slot]!.room);
+        const { counts, value } = this.table.fill(this.values, rest)(slots[slot]!.room, 0);
         takeFrom(rest, counts, 1);
         takeFrom(all, counts, -1);
         sum += value;
