@@ -12,16 +12,46 @@ import { SequentialValues } from './sequential-values';
 
 /** Different widths up to which the relaxation is worked out; its basis grows with their square. */
 const MAX_LP_WIDTHS = 700;
+const TIE_ROUNDS = 20;
+/** Table cells filled at most for the sake of ties. */
+const TIE_WORK = 20_000_000;
 const FIRST_ROUNDS = 16;
 /** Once it is known that the boards do not suffice, only so much is done to place as much as possible. */
 const TURNS_WHEN_SHORT = 3;
 
 /**
- * The cheapest packing that the time allows, with its bound: quick filling, sequential value correction, then the pattern
- * relaxation for the bound, and dives, branch and bound over the patterns within the gap and more corrected rounds in
- * turn until the bound is met. How much each does is counted, not timed, so that a run that ends by proof is repeatable.
+ * The cheapest packing that the time allows, with its bound, and others of the same cost. How much each method does is
+ * counted, not timed, so that a run that ends by proof is repeatable.
  */
 export function findPacking(
+  problem: PackingProblem,
+  seed: number,
+  isTimeUp: TimeIsUp,
+  onBetter: (best: Packing) => void,
+): Incumbent {
+  const incumbent = search(problem, seed, isTimeUp, onBetter);
+  if (incumbent.isProved) collectTies(incumbent, seed);
+  return incumbent;
+}
+
+/** A few more plans of the proved cost; little work, and as much of it whatever the clock says. */
+function collectTies(incumbent: Incumbent, seed: number): void {
+  const { problem, best } = incumbent;
+  const largest = problem.slots.reduce((most, { room }) => Math.max(most, room), 0);
+  const boards = best.boards.reduce((sum, count) => sum + count, 0);
+  const rounds = Math.min(TIE_ROUNDS, Math.floor(TIE_WORK / (boards * problem.widths.length * largest + 1)));
+  const values = new SequentialValues(problem, seededRandom(seed + 1));
+  for (let n = 0; n < rounds; n++) {
+    const found = values.round(best.cost, () => false);
+    if (found) incumbent.offer(found.uses);
+  }
+}
+
+/**
+ * Quick filling, sequential value correction, then the pattern relaxation for the bound; after that dives, corrected
+ * rounds and the mixes of boards between bound and cost in turn, until the two meet.
+ */
+function search(
   problem: PackingProblem,
   seed: number,
   isTimeUp: TimeIsUp,

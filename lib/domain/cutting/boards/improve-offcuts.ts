@@ -3,7 +3,8 @@ import type { PackingProblem } from './packing-problem';
 import { widthOf, type Packing } from './pattern';
 
 /** Room steps walked at most, so that the answer depends on the plan alone and not on the clock. */
-const MAX_WORK = 40_000_000;
+const MAX_WORK = 20_000_000;
+const GATHERED = 3;
 
 /** One board of a plan with what lies in each of its slots; counts may be shared and are replaced, never changed. */
 export interface FilledBoard {
@@ -12,7 +13,7 @@ export interface FilledBoard {
 }
 
 /** The boards of a packing, one by one. */
-export function boardsOf(problem: PackingProblem, packing: Packing): FilledBoard[] {
+function boardsOf(problem: PackingProblem, packing: Packing): FilledBoard[] {
   const perSlot: Int32Array[][] = problem.slots.map(() => []);
   for (const { pattern, times } of packing.uses)
     for (let n = 0; n < times; n++) perSlot[pattern.slot]!.push(pattern.counts);
@@ -28,7 +29,7 @@ export function boardsOf(problem: PackingProblem, packing: Packing): FilledBoard
  * Moves parts between the boards of a plan, at no more cost, so that what is left comes in few large pieces: the sum of
  * the squares of the pieces worth keeping grows with every move. A rack piece that is not touched counts as kept whole.
  */
-export function improveOffcuts(problem: PackingProblem, boards: FilledBoard[]): FilledBoard[] {
+function improveOffcuts(problem: PackingProblem, boards: FilledBoard[]): FilledBoard[] {
   const largest = problem.slots.reduce((most, { room }) => Math.max(most, room), 0);
   const table = new FillingTable(problem.widths, largest);
   let work = 0;
@@ -92,6 +93,28 @@ function changeKinds(problem: PackingProblem, boards: FilledBoard[]): boolean {
     });
   }
   return moved;
+}
+
+/**
+ * Of several packings of one cost, the one whose leftovers, once gathered, are the most useful; its boards. Only the
+ * most promising are gathered.
+ */
+export function mostUseful(problem: PackingProblem, packings: readonly Packing[]): FilledBoard[] {
+  const useful = (boards: FilledBoard[]) => boards.reduce((sum, board) => sum + usefulness(problem, board), 0);
+  const byUse = (a: Candidate, b: Candidate) => b.useful - a.useful;
+  const gathered = packings
+    .map((packing) => boardsOf(problem, packing))
+    .map((boards) => ({ boards, useful: useful(boards) }))
+    .sort(byUse)
+    .slice(0, GATHERED)
+    .map(({ boards }) => improveOffcuts(problem, boards))
+    .map((boards) => ({ boards, useful: useful(boards) }));
+  return gathered.sort(byUse)[0]!.boards;
+}
+
+interface Candidate {
+  boards: FilledBoard[];
+  useful: number;
 }
 
 function usefulness(problem: PackingProblem, board: FilledBoard): number {

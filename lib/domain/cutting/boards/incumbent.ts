@@ -2,10 +2,14 @@ import { isCheaper, packingOf, type Packing, type PatternUse } from './pattern';
 import type { PackingProblem } from './packing-problem';
 import { possibleCosts, type RoundUp } from './possible-costs';
 
+const MOST_TIES = 24;
+
 /** The best plan so far and the best bound, in cost units. */
 export class Incumbent {
   /** No plan costs less; a cost that a plan can have. 0 until everything has a place. */
   lowerBound = 0;
+  /** Other plans of the same cost, to choose between by what they leave over. */
+  ties: Packing[] = [];
   private highest = 0;
   private roundUp: RoundUp | undefined;
 
@@ -18,8 +22,13 @@ export class Incumbent {
   /** Keeps the plan if it is cheaper. */
   offer(uses: readonly PatternUse[]): boolean {
     const packing = packingOf(this.problem, uses);
-    if (!this.isAllowed(packing) || !isCheaper(packing, this.best)) return false;
+    if (!this.isAllowed(packing)) return false;
+    if (!isCheaper(packing, this.best)) {
+      if (!isCheaper(this.best, packing) && this.ties.length < MOST_TIES) this.ties.push(packing);
+      return false;
+    }
     this.best = packing;
+    this.ties = [];
     this.onBetter(packing);
     return true;
   }

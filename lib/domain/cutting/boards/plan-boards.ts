@@ -2,7 +2,7 @@ import { timeIsUp, type RunControl } from '../run-control';
 import { checkBoardRequest } from './check-request';
 import { clearStretches } from './clear-stretches';
 import { findPacking } from './find-packing';
-import { boardsOf, improveOffcuts } from './improve-offcuts';
+import { mostUseful } from './improve-offcuts';
 import { layOut } from './lay-out';
 import { lengthTaken, packingProblem, type PackingProblem } from './packing-problem';
 import type { Packing } from './pattern';
@@ -26,8 +26,8 @@ export function planBoards(request: BoardRequest, control: RunControl<BoardPlan>
   const isTimeUp = timeIsUp(request.timeLimitMs ?? DEFAULT_LIMIT_MS, control);
   const { fitting, unplaced } = sortOut(request);
   const problem = packingProblem(request, fitting);
-  const toPlan = (packing: Packing, lowerBound: number): BoardPlan => {
-    const filled = improveOffcuts(problem, boardsOf(problem, packing));
+  const toPlan = (packings: Packing[], lowerBound: number): BoardPlan => {
+    const filled = mostUseful(problem, packings);
     const { boards, placed } = layOut(request, problem, filled);
     const cost = filled.reduce((sum, { kind }) => sum + problem.kinds[kind]!.cost, 0) * problem.costUnit;
     const left = fitting.flatMap((part) => leftOver(part, placed.get(part.id) ?? 0));
@@ -40,10 +40,10 @@ export function planBoards(request: BoardRequest, control: RunControl<BoardPlan>
     };
   };
   const { onProgress } = control;
-  const { best, lowerBound } = findPacking(problem, request.seed ?? 1, isTimeUp, (better) =>
-    onProgress?.(toPlan(better, 0)),
+  const { best, ties, lowerBound } = findPacking(problem, request.seed ?? 1, isTimeUp, (better) =>
+    onProgress?.(toPlan([better], 0)),
   );
-  return toPlan(best, best.missing === 0 ? lowerBound : boundOfPlaced(problem, best));
+  return toPlan([best, ...ties], best.missing === 0 ? lowerBound : boundOfPlaced(problem, best));
 }
 
 /** Parts that some board can hold, and why the others cannot be had. */
