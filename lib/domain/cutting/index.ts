@@ -1,15 +1,6 @@
-export { checkBoardPlan } from './boards/check-board-plan';
-export { planBoards } from './boards/plan-boards';
-export { remainderOf, replanBoards, type BoardReplan, type BoardsUnderWay } from './boards/replan-boards';
-export type {
-  AvoidedStretch,
-  BoardCut,
-  BoardPart,
-  BoardPlan,
-  BoardRequest,
-  BoardStock,
-  PlannedBoard,
-  UnplacedPart,
-} from './boards/request';
-export { CuttingRequestError } from './request-error';
-export type { RunControl } from './run-control';
+export * from './boards/check-board-plan';
+export * from './boards/plan-boards';
+export * from './boards/replan-boards';
+export type * from './boards/request';
+export * from './request-error';
+export type * from './run-control';
