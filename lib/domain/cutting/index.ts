@@ -4,3 +4,17 @@ export * from './boards/replan-boards';
 export type * from './boards/request';
 export * from './request-error';
 export type * from './run-control';
+export { checkSheetPlan } from './sheets/check-sheet-plan';
+export { planSheets } from './sheets/plan-sheets';
+export type {
+  Cut,
+  CutDirection,
+  GrainWish,
+  Placement,
+  PlannedSheet,
+  Rectangle,
+  SheetPart,
+  SheetPlan,
+  SheetRequest,
+  SheetStock,
+} from './sheets/request';

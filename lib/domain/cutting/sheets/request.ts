@@ -68,11 +68,12 @@ export interface Rectangle {
 
 /**
  * What is done with one rectangle of a sheet: cut through from edge to edge into two, or left as it is. Of a cut, `at` is
- * where its kerf begins: `first` lies before it, `rest` behind the kerf; `rest` is null where the kerf runs off the end.
+ * where its kerf begins: `first` lies before it, `rest` behind the kerf. Where the kerf runs off an edge there is nothing on
+ * that side: null.
  */
 export type Cut = Rectangle &
   (
-    | { kind: 'cut'; direction: CutDirection; at: Length; first: Cut; rest: Cut | null }
+    | { kind: 'cut'; direction: CutDirection; at: Length; first: Cut | null; rest: Cut | null }
     | { kind: 'part'; partId: string; turned: boolean }
     | { kind: 'offcut' }
     | { kind: 'waste' }

@@ -1,5 +1,5 @@
 import type { UnplacedPart } from '../boards/request';
-import type { CutDirection, SheetPart, SheetRequest, SheetStock } from './request';
+import type { CutDirection, GrainWish, SheetPart, SheetRequest, SheetStock } from './request';
 
 /**
  * A sheet as the search sees it: strips run along u and lie side by side along v. For a first cut across, u is the
@@ -21,6 +21,8 @@ export interface Lie {
   x: number;
   y: number;
   turned: boolean;
+  /** Against the wish about the grain, so only on a sheet that says it has none. */
+  freeOnly: boolean;
 }
 
 /** One piece, or a matched row of pieces that stays together. */
@@ -74,16 +76,12 @@ export function sheetProblem(request: SheetRequest): { problem: SheetProblem; un
   const items: Item[] = [];
   const add = (pieces: readonly SheetPart[], row: Item['row'], lies: Lie[]) =>
     items.push({ index: items.length, pieces, row, lies, area: lies[0]!.x * lies[0]!.y });
-  const fits = ({ x, y }: Lie, free: boolean) =>
-    kinds.some(
-      ({ sheet, direction, u, v }) =>
-        (!free || sheet.grain === false) && (direction === 'along' ? x <= u && y <= v : x <= v && y <= u),
-    );
+  const fits = (lie: Lie) => kinds.some((kind) => fitsKind(lie, kind));
 
   for (const part of request.parts) {
     if (part.matched !== undefined || part.quantity === 0) continue;
     const wish = part.grain ?? 'any';
-    const lies = liesOf(part, kerf, wish).filter((lie) => fits(lie, false));
+    const lies = liesOf(part, kerf, wish).filter(fits);
     if (lies.length === 0) {
       unplaced.push({ partId: part.id, quantity: part.quantity, reason: whyNot(part, kinds, kerf) });
       continue;
@@ -91,7 +89,10 @@ export function sheetProblem(request: SheetRequest): { problem: SheetProblem; un
     for (let piece = 0; piece < part.quantity; piece += 1) add([part], null, lies);
   }
   for (const group of matchedGroups(request.parts)) {
-    const row = rowLies(group, kerf, (lie) => fits(lie, false));
+    const row = rowLies(group, kerf, (lie, along) =>
+      // A row that ran across the strips would be cut a stage later than its stack.
+      kinds.some((kind) => (kind.direction === 'along') === along && fitsKind(lie, kind)),
+    );
     if (row) add(group, row.row, row.lies);
     else unplaced.push(...groupUnplaced(group));
   }
@@ -110,12 +111,17 @@ export function sheetProblem(request: SheetRequest): { problem: SheetProblem; un
   };
 }
 
-function liesOf(part: SheetPart, kerf: number, wish: 'along' | 'across' | 'any'): Lie[] {
-  const straight = { x: part.length + kerf, y: part.width + kerf, turned: false };
-  const turned = { x: part.width + kerf, y: part.length + kerf, turned: true };
-  if (wish === 'along') return [straight];
-  if (wish === 'across') return [turned];
-  return part.length === part.width ? [straight] : [straight, turned];
+/** Whether a lie has room on a sheet and its grain. */
+export function fitsKind({ x, y, freeOnly }: Lie, { sheet, direction, u, v }: SheetKind): boolean {
+  if (freeOnly && sheet.grain !== false) return false;
+  return direction === 'along' ? x <= u && y <= v : x <= v && y <= u;
+}
+
+function liesOf(part: SheetPart, kerf: number, wish: GrainWish): Lie[] {
+  const [x, y] = [part.length + kerf, part.width + kerf];
+  const straight = { x, y, turned: false, freeOnly: wish === 'across' };
+  const turned = { x: y, y: x, turned: true, freeOnly: wish === 'along' };
+  return wish === 'any' && x === y ? [straight] : [straight, turned];
 }
 
 /** Pieces of each matched group, in the order of the list. */
@@ -134,19 +140,22 @@ function matchedGroups(parts: readonly SheetPart[]): SheetPart[][] {
 function rowLies(
   group: readonly SheetPart[],
   kerf: number,
-  fits: (lie: Lie) => boolean,
+  fits: (lie: Lie, alongStrips: boolean) => boolean,
 ): { row: 'x' | 'y'; lies: Lie[] } | null {
   const wishes = new Set(group.map(({ grain = 'any' }) => grain).filter((grain) => grain !== 'any'));
   if (wishes.size > 1) return null;
   const [wish = 'any'] = wishes;
   for (const row of ['x', 'y'] as const) {
-    const lies = (wish === 'any' ? [false, true] : [wish === 'across']).map((turned): Lie => {
+    const lies = [false, true].map((turned): Lie => {
+      const freeOnly = wish !== 'any' && turned !== (wish === 'across');
       const xs = group.map(({ length, width }) => (turned ? width : length) + kerf);
       const ys = group.map(({ length, width }) => (turned ? length : width) + kerf);
       const sum = (sizes: number[]) => sizes.reduce((total, size) => total + size, 0);
-      return row === 'x' ? { x: sum(xs), y: Math.max(...ys), turned } : { x: Math.max(...xs), y: sum(ys), turned };
+      return row === 'x'
+        ? { x: sum(xs), y: Math.max(...ys), turned, freeOnly }
+        : { x: Math.max(...xs), y: sum(ys), turned, freeOnly };
     });
-    const fitting = lies.filter(fits);
+    const fitting = lies.filter((lie) => fits(lie, row === 'x'));
     if (fitting.length > 0) return { row, lies: fitting };
   }
   return null;
@@ -163,9 +172,7 @@ function groupUnplaced(group: readonly SheetPart[]): UnplacedPart[] {
 
 function whyNot(part: SheetPart, kinds: readonly SheetKind[], kerf: number): string {
   if (kinds.length === 0) return 'There is no sheet to cut it from. Add sheets.';
-  const turnable = liesOf(part, kerf, 'any').some(({ x, y }) =>
-    kinds.some(({ direction, u, v }) => (direction === 'along' ? x <= u && y <= v : x <= v && y <= u)),
-  );
+  const turnable = liesOf(part, kerf, 'any').some((lie) => kinds.some((kind) => fitsKind(lie, kind)));
   return turnable
     ? 'It fits a sheet only when turned against the grain it wants. Allow it to be turned, or use a larger sheet.'
     : 'It is larger than every sheet once the edges are trimmed. Use a larger sheet, or make the part in pieces.';
