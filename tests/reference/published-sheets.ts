@@ -1,39 +1,48 @@
 import { readFileSync } from 'node:fs';
-import type { SheetPart, SheetRequest } from '@/lib/domain/cutting/sheets/request';
+import type { SheetRequest } from '@/lib/domain/cutting';
 
 export const PUBLISHED_SHEETS = 'tests/reference/data/cut2d/instances.csv';
 
 export interface PublishedSheets {
   name: string;
-  /** Among the forty that every test run checks. */
-  isInSubset: boolean;
-  /** Parts may be turned. */
-  isTurnable: boolean;
+  pieces: number;
   /** Sheets in the best known plan of three stages. */
   bestKnown: number;
-  /** No plan has fewer sheets, whatever the rule of cutting; computed by another program. */
-  bound: number;
   request: SheetRequest;
 }
 
-/** Published bin packing instances as sheet requests: one size of sheet, no kerf. See SOURCE.md beside the file. */
-export function publishedSheets(isTurnable: boolean): PublishedSheets[] {
+/**
+ * Published two-dimensional bin packing instances as sheet requests: one size of sheet at the price of one, no kerf, three
+ * stages, first cut along. See SOURCE.md beside the file.
+ *
+ * @param turnable  pieces may be turned by a quarter; else they lie as they are
+ */
+export function publishedSheets(turnable: boolean): PublishedSheets[] {
   const [, ...rows] = readFileSync(PUBLISHED_SHEETS, 'utf8').trim().split('\n');
   return rows.map((row) => {
-    const [name, subset, length, width, boundOriented, oriented, , boundTurnable, turnable, , sizes] = row.split(',');
-    const counts = new Map<string, number>();
-    for (const size of sizes!.split(' ')) counts.set(size, (counts.get(size) ?? 0) + 1);
-    const parts = [...counts].map(([size, quantity]): SheetPart => {
-      const [partLength, partWidth] = size.split('x').map(Number);
-      return { id: size, length: partLength!, width: partWidth!, quantity, grain: isTurnable ? 'any' : 'along' };
+    const [name, pieces, length, width, bestOriented, bestTurnable, sizes] = row.split(',');
+    const parts = sizes!.split(' ').map((size, index) => {
+      const [sides, quantity = '1'] = size.split('*');
+      const [partLength, partWidth] = sides!.split('x').map(Number);
+      return {
+        id: String(index),
+        length: partLength!,
+        width: partWidth!,
+        quantity: Number(quantity),
+        grain: turnable ? ('any' as const) : ('along' as const),
+      };
     });
     return {
       name: name!,
-      isInSubset: subset === '1',
-      isTurnable,
-      bestKnown: Number(isTurnable ? turnable : oriented),
-      bound: Number(isTurnable ? boundTurnable : boundOriented),
-      request: { sheets: [{ id: 'sheet', length: Number(length), width: Number(width) }], parts, kerf: 0, stages: 3 },
+      pieces: Number(pieces),
+      bestKnown: Number(turnable ? bestTurnable : bestOriented),
+      request: {
+        sheets: [{ id: 'sheet', length: Number(length), width: Number(width), price: 1 }],
+        parts,
+        kerf: 0,
+        stages: 3,
+        firstCut: 'along',
+      },
     };
   });
 }

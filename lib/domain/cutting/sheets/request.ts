@@ -48,7 +48,9 @@ export interface SheetRequest {
    * to its size is not. 3 when left out.
    */
   stages?: 2 | 3 | 4;
-  /** `either` when left out. */
+  /**
+   * `either` when left out. A strip as wide as the sheet needs no cut of its own: its sheet begins with the second stage.
+   */
   firstCut?: CutDirection | 'either';
   /** Least piece worth keeping, either way round; any piece is when left out. */
   keepOffcut?: { length: Length; width: Length };
