@@ -80,7 +80,8 @@ export async function exchange<T>({
     };
   }
   const message = problem.data.detail;
-  if (status === 401) return { outcome: 'sign-in', message };
+  // Another person signed in on this browser: what is held waits for the one who made it.
+  if (status === 401 || problem.data.code === 'wrong-account') return { outcome: 'sign-in', message };
   if (status === 426) return { outcome: 'update', message };
   if (status === 413 || status === 422) return { outcome: 'too-much', message };
   return { outcome: 'refused', message };

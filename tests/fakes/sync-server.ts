@@ -6,7 +6,8 @@ import { logPushSchema, PAGE_ENTRIES, type LogAnswer } from '@/lib/domain/build/
 import { uuidOf } from '../support/log';
 
 /** What the line does to one request. */
-export type Trouble = 'lost-request' | 'lost-answer' | 'wifi-page' | 'signed-out' | 'busy' | 'too-large' | null;
+export type Trouble =
+  'lost-request' | 'lost-answer' | 'wifi-page' | 'signed-out' | 'wrong-account' | 'busy' | 'too-large' | null;
 
 /**
  * A server in memory that judges, stamps and orders with the real domain functions. The test says what happens to each
@@ -34,6 +35,7 @@ export class FakeSyncServer {
         headers: { 'content-type': 'text/html' },
       });
     if (trouble === 'signed-out') return problem(401, 'sign-in-needed');
+    if (trouble === 'wrong-account') return problem(403, 'wrong-account');
     if (trouble === 'busy') return problem(503, 'away', { 'retry-after': '7' });
     if (trouble === 'too-large') return problem(413, 'too-large');
     const answer = url.includes('/photos/') ? this.takePhoto(url, init) : this.takeLog(init);

@@ -66,12 +66,15 @@ describe('sending', () => {
     expect((await getSyncStatus(phone.db)).lastError).toContain('not Holdfast’s server');
   });
 
-  it('an ended sign-in pauses and keeps all thirty', async () => {
+  it.each([
+    ['an ended sign-in', 'signed-out'],
+    ['a sign-in of somebody else on this browser', 'wrong-account'],
+  ] as const)('%s pauses and keeps all thirty', async (_, trouble) => {
     for (let i = 0; i < 30; i += 1) await writeNote(phone.db, { buildId: BUILD, text: `note ${i}`, stepId: null });
-    troubles('signed-out');
+    troubles(trouble);
     await phone.runner.syncNow();
     expect(await getSyncStatus(phone.db)).toMatchObject({ state: 'sign-in', nextTryAt: null });
-    expect(await getHeldCounts(phone.db)).toMatchObject({ entries: 30 });
+    expect(await getHeldCounts(phone.db)).toMatchObject({ entries: 30, refused: 0 });
     await phone.runner.syncNow();
     expect(server.log).toHaveLength(30);
   });
