@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
+import { OwedSignOut } from '@/components/account/owed-sign-out';
 import { DeskNav } from '@/components/desk/desk-nav';
 import { DeskQueries } from '@/components/desk/desk-queries';
 import { Mark } from '@/components/ui/mark';
@@ -16,6 +17,7 @@ export default function DeskLayout({ children }: { children: ReactNode }) {
           <DeskNav />
         </div>
       </header>
+      <OwedSignOut />
       <main className="mx-auto w-full max-w-5xl grow px-5 py-8 sm:px-8">
         <DeskQueries>{children}</DeskQueries>
       </main>

@@ -1,6 +1,7 @@
 'use client';
 import { useState } from 'react';
 import { DISCARD_WORD, discardAccount, keepHere } from '@/lib/store/sign-out';
+import { saveSignOutOwed } from '@/lib/store/device-database';
 import { packCacheName } from '@/lib/device/pack';
 import { Button } from '@/components/ui/button';
 import { ActButton } from '@/components/bench/entry/act-button';
@@ -31,12 +32,13 @@ export function SignOutForm({ onLeave }: { onLeave: () => void }) {
     setFault(null);
     const { signOut } = await import('@/components/account/sign-in-out');
     const answer = await signOut();
-    // With no signal the sign-in cannot end at the server. Leaving this phone's bench is still the person's to do.
+    // With no signal the sign-in cannot end at the server yet. Leaving this phone's bench is still the person's to do.
     if (!answer.ok && answer.code !== 'no-signal' && answer.code !== 'signed-out') {
       setFault(answer.detail);
       setBusy(false);
       return;
     }
+    if (!answer.ok && answer.code === 'no-signal') await saveSignOutOwed(true);
     if (how === 'keep') await keepHere(db);
     else if (!(await discardAccount(db, count, typed))) {
       setFault(`Nothing was thrown away. Type ${DISCARD_WORD} first.`);

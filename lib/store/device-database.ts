@@ -105,6 +105,18 @@ export async function leaveAccount(): Promise<void> {
   await deviceDatabase().facts.put({ key: 'currentAccountId', value: null });
 }
 
+/**
+ * Notes that this browser's sign-in is still to be ended at the server, because it was left with no signal; `false` once
+ * it has ended or another took its place.
+ */
+export async function saveSignOutOwed(owed: boolean): Promise<void> {
+  await deviceDatabase().facts.put({ key: 'signOutOwed', value: owed });
+}
+
+export async function isSignOutOwed(): Promise<boolean> {
+  return (await readFact<boolean>('signOutOwed')) === true;
+}
+
 /** Takes an account off the list of this phone, after its database was deleted. */
 export async function forgetAccount(accountId: string): Promise<void> {
   const db = deviceDatabase();

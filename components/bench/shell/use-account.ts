@@ -1,6 +1,6 @@
 'use client';
 import { useEffect, useState } from 'react';
-import { enterAccount, getCurrentAccount } from '@/lib/store/device-database';
+import { enterAccount, getCurrentAccount, isSignOutOwed } from '@/lib/store/device-database';
 
 /** What the server last said about who is signed in on this browser. */
 export type SignInState = 'asking' | 'signed-in' | 'signed-out' | 'no-signal';
@@ -45,6 +45,11 @@ interface Me {
 
 async function askWhoIsSignedIn(): Promise<Me | 'signed-out' | 'no-signal'> {
   try {
+    // Who signed out here with no signal is not let in again by the first one.
+    if (await isSignOutOwed()) {
+      const { endOwedSignOut } = await import('@/components/account/sign-in-out');
+      if ((await endOwedSignOut()) === 'owed') return 'no-signal';
+    }
     const response = await fetch('/api/me', { cache: 'no-store', signal: AbortSignal.timeout(8_000) });
     if (response.status === 401) return 'signed-out';
     const body: unknown = await response.json();
