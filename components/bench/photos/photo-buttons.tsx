@@ -60,10 +60,9 @@ export function PhotoButtons({ stepId, wantedId = null, of }: PhotoButtonsProps)
         return;
       }
       const { ok: _, ...facts } = prepared;
-      const saved = await act(of ? `Photo kept: ${of}` : 'Photo kept', (acts) =>
+      await act(of ? `Photo kept: ${of}` : 'Photo kept', (acts) =>
         acts.addPhoto(db, { buildId: build.id, stepId, wantedId, caption: '', ...facts }),
       );
-      if (saved) await clearDraft(db, ASKED_PHOTO_KEY);
     } catch (error) {
       console.error(error);
       setTrouble('The photo could not be read. It may still be in your gallery: choose it from there.');
@@ -71,6 +70,8 @@ export function PhotoButtons({ stepId, wantedId = null, of }: PhotoButtonsProps)
       // The same picture may be chosen again after a failure.
       input.value = '';
       setBusy(false);
+      // A picture came, and what became of it has been said: nothing is left to ask after.
+      await clearDraft(db, ASKED_PHOTO_KEY);
     }
   }
 
