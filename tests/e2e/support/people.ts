@@ -2,12 +2,21 @@ import { expect, type Page } from '@playwright/test';
 import { demoPassword } from '@/scripts/demo.mjs';
 import type { Program } from './program';
 
+interface Person {
+  name: string;
+  email: string;
+  password: string;
+}
+
+export const toni: Person = {
+  name: 'Toni Birch',
+  email: 'toni@holdfast.example',
+  password: 'two-trestles-and-a-plane',
+};
+export const ira: Person = { name: 'Ira Beech', email: 'ira@holdfast.example', password: 'a-bench-and-four-feet' };
+
 /** Signs up, confirms by the letter, and is signed in. */
-export async function signUp(
-  page: Page,
-  program: Program,
-  { name, email, password }: { name: string; email: string; password: string },
-) {
+export async function signUp(page: Page, program: Program, { name, email, password }: Person) {
   await page.goto(`${program.url}/sign-up`);
   await page.getByLabel('Name').fill(name);
   await page.getByLabel('E-mail').fill(email);

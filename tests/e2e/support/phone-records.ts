@@ -33,3 +33,7 @@ export function recordsOnPhone<T>(page: Page, store: string, accountId?: string)
 
 export const entriesOnPhone = (page: Page, accountId?: string) =>
   recordsOnPhone<LocalEntry>(page, 'entries', accountId);
+
+/** Entries that are only in this browser. */
+export const heldOnPhone = async (page: Page, accountId?: string) =>
+  (await entriesOnPhone(page, accountId)).filter(({ sync }) => sync === 'held');
