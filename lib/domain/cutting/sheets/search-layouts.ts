@@ -15,9 +15,9 @@ export interface Layouts {
 /** Long lists are laid once, looking back over this many sheets. */
 const LOOK_BACK = 12;
 /** Accepted is what is no worse than this many rounds ago. */
-const MEMORY = 60;
+const MEMORY = 300;
 /** Rounds without a better layout until the search begins anew from the best. */
-const STALE = 4_000;
+const STALE = 12_000;
 /** Rounds spent on larger offcuts once the cost is settled. */
 const OFFCUT_ROUNDS = 400;
 
@@ -174,7 +174,7 @@ interface Packed {
 function energyOf({ sheets, off }: Packed): number {
   let energy = 0;
   for (const { area } of off) energy += area;
-  for (const { kind, filled } of sheets) energy -= (0.02 * filled * filled) / (kind.u * kind.v);
+  for (const { kind, filled } of sheets) energy -= (0.1 * filled * filled) / (kind.u * kind.v);
   return energy;
 }
 
