@@ -2,7 +2,7 @@
 import { useId } from 'react';
 import type { Length } from '@/lib/domain/measure';
 import type { PlanFace } from '@/lib/domain/plan/document';
-import { Hatch } from './hatch';
+import { Hatch, hatched } from './hatch';
 
 interface FaceMapProps {
   face: PlanFace;
@@ -60,7 +60,7 @@ export function FaceMap({ face, length, width, stepId, done, format }: FaceMapPr
                 y={y(cut.y + cut.width + m)}
                 width={(cut.length + 2 * m) * k}
                 height={(cut.width + 2 * m) * k}
-                fill={`url(#${CSS_SAFE(hatch)})`}
+                fill={hatched(hatch)}
                 stroke="var(--red)"
                 strokeWidth={1.5}
                 strokeDasharray="4 3"
@@ -104,9 +104,6 @@ export function FaceMap({ face, length, width, stepId, done, format }: FaceMapPr
     </svg>
   );
 }
-
-/** `useId` gives characters that a url() reference must not hold bare. */
-const CSS_SAFE = (id: string) => id.replace(/[^\w-]/g, '\\$&');
 
 function describe(face: PlanFace, fasteners: PlanFace['fasteners'], stepId: string, done: ReadonlySet<string>): string {
   const now = fasteners.filter(({ step }) => step === stepId).length;

@@ -6,3 +6,6 @@ export function Hatch({ id, colour, pitch = 8 }: { id: string; colour: string; p
     </pattern>
   );
 }
+
+/** Fill with a hatching. React's ids hold characters that have to be escaped there. */
+export const hatched = (id: string) => `url(#${id.replace(/[^\w-]/g, '\\$&')})`;

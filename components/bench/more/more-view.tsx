@@ -13,6 +13,7 @@ export function MoreView() {
   const buildId = build.id;
   const ways: { to: Partial<BenchAddress>; word: string; says: string }[] = [
     { to: { buildId, view: 'log' }, word: 'Build log', says: 'All that was done, by day' },
+    { to: { buildId, view: 'cutting' }, word: 'Buy and cut', says: 'How much stock, and a diagram of each piece' },
     {
       to: { buildId, view: 'drawings' },
       word: 'Drawings',

@@ -14,6 +14,7 @@ export const benchViews = [
   'notes',
   'sizes',
   'drawings',
+  'cutting',
   'log',
   'close',
   'more',

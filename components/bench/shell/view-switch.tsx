@@ -23,6 +23,7 @@ const PhotosView = dynamic(() => import('../photos/photos-view').then((m) => m.P
 const NotesView = dynamic(() => import('../notes/notes-view').then((m) => m.NotesView), { loading });
 const SizesView = dynamic(() => import('../sizes/sizes-view').then((m) => m.SizesView), { loading });
 const DrawingsView = dynamic(() => import('../drawings/drawings-view').then((m) => m.DrawingsView), { loading });
+const CuttingView = dynamic(() => import('../cutting/cutting-view').then((m) => m.CuttingView), { loading });
 const LogView = dynamic(() => import('../log/log-view').then((m) => m.LogView), { loading });
 const CloseDownView = dynamic(() => import('../close/close-down-view').then((m) => m.CloseDownView), { loading });
 const MoreView = dynamic(() => import('../more/more-view').then((m) => m.MoreView), { loading });
@@ -76,6 +77,8 @@ function BuildView({ address }: { address: BenchAddress }) {
       return <SizesView stepId={address.stepId} />;
     case 'drawings':
       return <DrawingsView />;
+    case 'cutting':
+      return <CuttingView />;
     case 'log':
       return <LogView />;
     case 'close':

@@ -18,3 +18,5 @@ export type {
   SheetRequest,
   SheetStock,
 } from './sheets/request';
+export { cuttingJobs, usualHabits, type CuttingHabits, type CuttingJob } from './cutting-jobs';
+export { cutOrder, wasteOf, type OrderedCut } from './sheets/cut-order';
