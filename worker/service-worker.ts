@@ -40,7 +40,11 @@ self.addEventListener('fetch', (event) => {
 });
 
 async function fromPrecache(path: string, request: Request): Promise<Response> {
-  return (await serwist.matchPrecache(path)) ?? fetch(request);
+  const kept = await serwist.matchPrecache(path);
+  if (!kept) return fetch(request);
+  // A worker takes its address from the answer; one made here has none of its own, so that the address asked for stays,
+  // with the fragment in which the framework says what to load.
+  return request.destination === 'worker' ? new Response(kept.body, kept) : kept;
 }
 
 self.addEventListener('message', (event) => {

@@ -60,7 +60,7 @@ export function CuttingDiagram({ length, width, pieces, grain, label }: CuttingD
                 piece.look === 'estimate'
                   ? 'var(--amber-ground)'
                   : piece.look === 'kept'
-                    ? 'transparent'
+                    ? 'var(--chalk)'
                     : 'var(--paper)'
               }
               stroke={piece.look === 'kept' ? 'var(--soft)' : 'var(--iron)'}

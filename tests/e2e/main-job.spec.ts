@@ -86,6 +86,16 @@ test('an afternoon at the bench with the server stopped, and all of it in Postgr
     await expect(page.getByRole('dialog')).toHaveCount(0);
   });
 
+  await test.step('what to buy and how to cut it, worked out on the phone', async () => {
+    await page.goto(`${program.url}/bench?build=${buildId}&view=cutting`);
+    await expect(page.getByText('All stock is planned.')).toBeAttached({ timeout: 60_000 });
+    const plywood = page.getByRole('region', { name: /^3⁄4 in|^¾ in|^3\/4 in/ });
+    await expect(plywood.getByText(/^\d+ of 96″ × 48″/)).toBeVisible();
+    await expect(plywood.getByText(/% waste/)).toBeVisible();
+    expect(await page.getByRole('img').count()).toBeGreaterThan(4);
+    await expect(page.getByText('No plan.')).toHaveCount(0);
+  });
+
   await test.step('ten steps', async () => {
     await openStep(page, buildId, 'choose-boards');
     await tickHere(page);

@@ -37,15 +37,18 @@ function boards({ job, plan }: PlannedJob & { of: 'boards' }, labelOf: (partId: 
       sold: { length, width: null },
       times: 1,
       grain: true,
-      pieces: board.cuts.map(({ partId, start, end }) => ({
-        key: `${partId} ${start}`,
-        label: labelOf(partId),
-        x: start,
-        y: 0,
-        length: end - start,
-        width,
-        look: job.estimates.includes(partId) ? 'estimate' : 'part',
-      })),
+      pieces: [
+        ...board.cuts.map(({ partId, start, end }) => ({
+          key: `${partId} ${start}`,
+          label: labelOf(partId),
+          x: start,
+          y: 0,
+          length: end - start,
+          width,
+          look: job.estimates.includes(partId) ? ('estimate' as const) : ('part' as const),
+        })),
+        ...keptEnd(board.offcut, length, width),
+      ],
       cuts: board.cuts.map(({ start, end }) => ({ word: 'crosscut', setting: end - start })),
     };
   });
@@ -92,4 +95,11 @@ function sheets({ job, plan }: PlannedJob & { of: 'sheets' }, labelOf: (partId: 
       },
     ];
   });
+}
+
+/** What is left at the far end of a board, the end itself squared. */
+function keptEnd(offcut: number, length: number, width: number): DiagramPiece[] {
+  if (offcut < usualHabits.keepLength) return [];
+  const x = length - usualHabits.squareEnds - offcut;
+  return [{ key: 'kept', label: '', x, y: 0, length: offcut, width, look: 'kept' }];
 }

@@ -38,10 +38,7 @@ function Planned({ planned }: { planned: PlannedJob }) {
   const drawn = drawnPieces(planned, labelOf);
   const unplaced = [...job.unplaced, ...planned.plan.unplaced];
   const estimates = job.estimates.map(labelOf);
-  const used = drawn.reduce((sum, { length, width }) => sum + length * width, 0);
-  const inParts = drawn
-    .flatMap(({ pieces }) => pieces)
-    .reduce((sum, piece) => sum + (piece.look === 'kept' ? 0 : piece.length * piece.width), 0);
+  const share = shares(drawn);
   return (
     <>
       <p className="text-[1.25rem]">
@@ -49,7 +46,7 @@ function Planned({ planned }: { planned: PlannedJob }) {
         {costWords(planned)}
       </p>
       <p className="text-[1.0625rem] text-soft">
-        {used > 0 && `${Math.round((1 - inParts / used) * 100)} % is not parts. `}
+        {drawn.length > 0 && `${share.waste} % waste, ${share.kept} % left over in pieces worth keeping. `}
         {planned.plan.proved
           ? 'No cheaper plan exists for this list; that is proved.'
           : 'It may be possible with less; this is the best found in two seconds.'}
@@ -103,4 +100,19 @@ function costWords({ job, plan }: PlannedJob): string {
   return currency === undefined
     ? ''
     : `, ${formatMoney({ minor: plan.cost, currency }, navigator.language)} before tax`;
+}
+
+/** Whole per cents of what is bought that become dust and scrap, and that are left over to keep. */
+function shares(drawn: readonly DrawnPiece[]): { waste: number; kept: number } {
+  const area = (rows: readonly { length: number; width: number }[]) =>
+    rows.reduce((sum, { length, width }) => sum + length * width, 0);
+  const bought = drawn.reduce((sum, { length, width, times }) => sum + length * width * times, 0);
+  const of = (look: (kept: boolean) => boolean) =>
+    drawn.reduce(
+      (sum, { pieces, times }) => sum + times * area(pieces.filter((each) => look(each.look === 'kept'))),
+      0,
+    );
+  const percent = (part: number) => Math.round((part / Math.max(1, bought)) * 100);
+  const kept = percent(of((isKept) => isKept));
+  return { kept, waste: 100 - kept - percent(of((isKept) => !isKept)) };
 }

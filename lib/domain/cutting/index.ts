@@ -6,17 +6,6 @@ export * from './request-error';
 export type * from './run-control';
 export { checkSheetPlan } from './sheets/check-sheet-plan';
 export { planSheets } from './sheets/plan-sheets';
-export type {
-  Cut,
-  CutDirection,
-  GrainWish,
-  Placement,
-  PlannedSheet,
-  Rectangle,
-  SheetPart,
-  SheetPlan,
-  SheetRequest,
-  SheetStock,
-} from './sheets/request';
-export { cuttingJobs, usualHabits, type CuttingHabits, type CuttingJob } from './cutting-jobs';
-export { cutOrder, wasteOf, type OrderedCut } from './sheets/cut-order';
+export type * from './sheets/request';
+export { cuttingJobs, usualHabits, type CuttingJob } from './cutting-jobs';
+export { cutOrder, wasteOf } from './sheets/cut-order';
