@@ -18,6 +18,7 @@ const views = [
   ['photos', '&view=photos'],
   ['notes', '&view=notes'],
   ['sizes', '&view=sizes'],
+  ['cutting', '&view=cutting'],
   ['drawings', '&view=drawings'],
   ['log', '&view=log'],
   ['close-down', '&view=close'],
@@ -49,6 +50,7 @@ try {
     for (const [name, query] of views) {
       await page.goto(`${program.url}/bench?build=${buildId}${query}`);
       await page.getByRole('heading', { level: 1 }).waitFor();
+      if (name === 'cutting') await page.getByText('All stock is planned.').waitFor({ state: 'attached' });
       await page.evaluate(() => document.fonts.ready);
       await page.screenshot({ path: `docs/pictures/${name}-${scheme === 'light' ? 'day' : 'dim'}.png` });
     }
