@@ -42,7 +42,14 @@ export function Frame({ title, home, notices, foot, layout = 'page', children }:
         </header>
         {notices}
       </div>
-      {layout === 'page' ? <main className="bench-main">{children}</main> : children}
+      {layout === 'page' ? (
+        // Can have the focus, so that a screen that is only read scrolls by the keyboard too.
+        <main className="bench-main" tabIndex={0}>
+          {children}
+        </main>
+      ) : (
+        children
+      )}
       {foot ?? <div />}
     </div>
   );
