@@ -37,7 +37,8 @@ const WITHOUT_BUILD: readonly BenchView[] = ['builds', 'take', 'settings', 'emer
 
 /** Reads an address. A build without a view is its "what now"; a view that needs a build but has none is the list of builds. */
 export function readAddress(params: Pick<URLSearchParams, 'get'>): BenchAddress {
-  const buildId = params.get('build');
+  // Typed or shortened addresses may come in capitals; ids are kept in small letters.
+  const buildId = params.get('build')?.toLowerCase() || null;
   const asked = params.get('view');
   const known = benchViews.find((view) => view === asked);
   const stepId = params.get('step');
