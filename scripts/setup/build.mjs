@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { run } from './run.mjs';
-import { Mendable, say } from './say.mjs';
+import { Mendable, say, throwWhenDiskFull } from './say.mjs';
 
 const SOURCES = [
   'app',
@@ -30,8 +30,10 @@ export async function buildWhenChanged() {
   const { code, output } = await run('npm', ['run', '--silent', 'build'], {
     env: { ...process.env, NODE_ENV: 'production', NEXT_TELEMETRY_DISABLED: '1' },
   });
-  if (code !== 0)
+  if (code !== 0) {
+    throwWhenDiskFull(output);
     throw new Mendable('The build failed.', `Its last lines:\n${output.trim().split('\n').slice(-25).join('\n')}`);
+  }
   writeFileSync(MARK, now);
   return true;
 }

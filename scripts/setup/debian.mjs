@@ -1,6 +1,6 @@
 import { existsSync, mkdirSync, readdirSync, writeFileSync } from 'node:fs';
 import { isThere, run } from './run.mjs';
-import { Mendable, say } from './say.mjs';
+import { Mendable, say, throwWhenDiskFull } from './say.mjs';
 
 /**
  * Installs Debian packages, saying so; where there is no right to, prints the one command to run.
@@ -29,7 +29,7 @@ export async function installDebian(packages, why) {
   const shell = `export DEBIAN_FRONTEND=noninteractive; apt-get update -qq && apt-get install -y -qq -o Dpkg::Options::=--force-confold ${packages.join(' ')}`;
   const { code, output } = await run(isRoot ? 'sh' : 'sudo', isRoot ? ['-c', shell] : ['-n', 'sh', '-c', shell]);
   if (code !== 0) {
-    if (/No space left/i.test(output)) throw Object.assign(new Error('no space left'), { code: 'ENOSPC' });
+    throwWhenDiskFull(output);
     throw new Mendable(
       `${packages.join(', ')} could not be installed.`,
       `Run "${command}" by hand and read what it says:\n${output.trim().split('\n').slice(-5).join('\n')}`,

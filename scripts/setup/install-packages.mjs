@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { run } from './run.mjs';
-import { Mendable, say } from './say.mjs';
+import { Mendable, say, throwWhenDiskFull } from './say.mjs';
 
 const MARK = 'node_modules/.holdfast-lock';
 
@@ -12,7 +12,7 @@ export async function installPackages() {
   say('Installing the packages of the lock file (about a minute) …');
   const { code, output } = await run('npm', ['ci', '--no-audit', '--no-fund', '--loglevel=error']);
   if (code !== 0) {
-    if (/ENOSPC/.test(output)) throw Object.assign(new Error('no space left'), { code: 'ENOSPC' });
+    throwWhenDiskFull(output);
     throw new Mendable(
       'The packages could not be installed.',
       `npm said:\n${output.trim().split('\n').slice(-8).join('\n')}`,

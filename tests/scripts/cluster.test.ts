@@ -1,8 +1,10 @@
-import { chmodSync, existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { execFileSync } from 'node:child_process';
+import { chmodSync, existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { Client } from 'pg';
-import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it, vi } from 'vitest';
 import { ensureDatabase, startCluster } from '@/scripts/setup/cluster.mjs';
+import { runNode } from '../support/run-node';
 
 const isRoot = process.getuid?.() === 0;
 const room = vi.hoisted(() => ({ freeMb: null as number | null }));
@@ -15,6 +17,14 @@ vi.mock('node:fs', async (importOriginal) => {
 
 let folder: string;
 let said: string;
+/** A cluster that was made once and ended: making each anew would take most of the time. */
+let made: string;
+beforeAll(async () => {
+  made = mkdtempSync('/var/tmp/holdfast-made-');
+  chmodSync(made, 0o755);
+  await (await startCluster({ folder: path.join(made, 'postgres'), forTests: true })).stop();
+});
+afterAll(() => rmSync(made, { recursive: true }));
 const stops: (() => Promise<void>)[] = [];
 beforeEach(() => {
   // Not in the system's folder for temporary files, which a machine may have mounted so that nothing in it runs.
@@ -28,7 +38,7 @@ beforeEach(() => {
   });
 });
 afterEach(async () => {
-  for (const stop of stops.splice(0)) await stop();
+  for (const stop of stops.splice(0).reverse()) await stop();
   vi.restoreAllMocks();
   rmSync(folder, { recursive: true, force: true });
 });
@@ -37,6 +47,12 @@ async function start({ durable = false } = {}) {
   const cluster = await startCluster({ folder: path.join(folder, 'postgres'), forTests: !durable });
   stops.push(cluster.stop);
   return cluster;
+}
+
+/** A cluster made earlier lies in the folder, and nothing runs. */
+function lay(name = 'postgres'): string {
+  execFileSync('cp', ['-a', path.join(made, 'postgres'), path.join(folder, name)]);
+  return path.join(folder, name);
 }
 
 async function ask(url: string, sql: string): Promise<unknown[]> {
@@ -71,15 +87,31 @@ describe('the project’s own database', () => {
     expect(/^Uid:\s+(\d+)/m.exec(status)![1]).not.toBe('0');
   });
 
-  it('that is still running from an earlier start is used again', async () => {
+  it('that another start runs is used with it, and not ended under its feet', async () => {
+    lay();
     const first = await start();
-    const second = await startCluster({ folder: path.join(folder, 'postgres'), forTests: true });
+    const second = await start();
+    expect(second.port).toBe(first.port);
+    expect(said).toMatch(/running under another start of Holdfast/);
+    await second.stop();
+    expect(await ask(first.url('postgres'), 'select 1 as one')).toEqual([{ one: 1 }]);
+  });
+
+  it('that is still running after its start was killed is used again, and ended at last', async () => {
+    lay();
+    const first = await start();
+    writeFileSync(path.join(folder, 'postgres/started-by'), `${process.pid} 1`);
+    stops.length = 0;
+    const second = await start();
     expect(second.port).toBe(first.port);
     expect(said).toMatch(/still running from an earlier start/);
+    const pid = Number(lockOf(path.join(folder, 'postgres'))[0]);
+    await second.stop();
+    await untilGone(pid);
   });
 
   it('left by a crash, comes up again with what was in it', async () => {
-    const home = path.join(folder, 'postgres');
+    const home = lay();
     const first = await start({ durable: true });
     await ensureDatabase(first, 'holdfast');
     await ask(first.url('holdfast'), 'create table kept as select 42 as answer');
@@ -87,11 +119,66 @@ describe('the project’s own database', () => {
     process.kill(pid, 'SIGKILL');
     await untilGone(pid);
     stops.length = 0;
-    // The number of the dead process has gone to one that is no database.
+    // Its number has gone to a database, of the same account, that is another one.
+    lay('other');
+    const other = await startCluster({ folder: path.join(folder, 'other'), forTests: true });
+    stops.push(other.stop);
     const lock = lockOf(home);
-    writeFileSync(path.join(home, 'cluster/postmaster.pid'), [String(process.pid), ...lock.slice(1)].join('\n'));
+    const taken = lockOf(path.join(folder, 'other'))[0]!;
+    writeFileSync(path.join(home, 'cluster/postmaster.pid'), [taken, ...lock.slice(1)].join('\n'));
     const again = await start({ durable: true });
+    expect(said).toMatch(/left by a crash; its lock is taken away/);
     expect(await ask(again.url('holdfast'), 'select answer from kept')).toEqual([{ answer: 42 }]);
+  });
+
+  it('whose making was cut short is made anew', async () => {
+    mkdirSync(path.join(folder, 'postgres/cluster.half'), { recursive: true });
+    writeFileSync(path.join(folder, 'postgres/cluster.half/PG_VERSION'), '15\n');
+    const cluster = await start();
+    expect(await ask(cluster.url('postgres'), 'select 1 as one')).toEqual([{ one: 1 }]);
+    expect(existsSync(path.join(folder, 'postgres/cluster.half'))).toBe(false);
+  });
+
+  it.each([
+    [
+      'of another version',
+      'PG_VERSION',
+      '9\n',
+      /made by another version of PostgreSQL\. Install that version, or move/,
+    ],
+    [
+      'with settings it cannot read',
+      'postgresql.conf',
+      'nonsense\n',
+      /did not start\. Mend what is said here.*syntax error/s,
+    ],
+  ])('%s says so and what to do', async (_, file, content, words) => {
+    const home = lay();
+    writeFileSync(path.join(home, 'cluster', file), content);
+    await expect(start()).rejects.toThrow(words);
+  });
+
+  it('without its password, or in the place of something else, says so and touches nothing', async () => {
+    const home = lay();
+    rmSync(path.join(home, 'password'));
+    await expect(start()).rejects.toThrow(/password is missing.*Put it back from a backup/);
+    rmSync(path.join(home, 'cluster/PG_VERSION'));
+    await expect(start()).rejects.toThrow(/is no whole database cluster\. Move it away/);
+    expect(existsSync(path.join(home, 'cluster/base'))).toBe(true);
+  });
+
+  it.runIf(isRoot)('that a start as root left to another account says so to an ordinary one', async () => {
+    lay();
+    const run = await runNode([
+      '--input-type=module',
+      '-e',
+      `import { runMain } from './scripts/setup/say.mjs';
+       import { startCluster } from './scripts/setup/cluster.mjs';
+       process.setuid(65534);
+       runMain(() => startCluster({ folder: '${folder}/postgres' }));`,
+    ]);
+    expect(run.firstLine).toMatch(/belongs to another account, perhaps from a start as root\. Start as that account/);
+    expect(run.output).not.toMatch(/^\s+at /m);
   });
 
   it('does not begin on a disk that is nearly full, and says how much is left', async () => {

@@ -1,10 +1,12 @@
 import { createHash } from 'node:crypto';
-import { chmodSync, mkdtempSync, readFileSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
+import { once } from 'node:events';
+import { chmodSync, mkdtempSync, readFileSync, readdirSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
 import { createServer, type AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
+import { transform } from 'esbuild';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { checkNode } from '@/scripts/setup/check-node.mjs';
+import { nodeProblem } from '@/scripts/setup/check-node.mjs';
 import { freePort } from '@/scripts/setup/ports.mjs';
 import { runNode } from '../support/run-node';
 
@@ -51,11 +53,47 @@ describe('a start that cannot be', () => {
   });
 
   it.each(['18.20.4', '20.8.1', '25.0.0'])('because Node is %s, says what is wanted', (version) => {
-    expect(() => checkNode(version)).toThrow(/This is Node .*Holdfast runs on Node 20 .*Install Node 20/);
+    expect(nodeProblem(version)).toMatch(/^This is Node .*Holdfast runs on Node 20 .*Install Node 20/);
   });
 
   it.each(['20.9.0', '20.20.2', '22.1.0', '24.11.0'])('is none on Node %s', (version) => {
-    expect(() => checkNode(version)).not.toThrow();
+    expect(nodeProblem(version)).toBeNull();
+  });
+
+  it.each(['start', 'test'])(
+    'because Node is too old, loads nothing more of npm %s than what says so',
+    async (name) => {
+      const old = `Object.defineProperty(process, 'versions', { value: { ...process.versions, node: '12.22.12' } });`;
+      const run = await runNode(['--import', `data:text/javascript,${encodeURIComponent(old)}`, `scripts/${name}.mjs`]);
+      expectSentence(run, /^This is Node 12\.22\.12, and Holdfast runs on Node 20/, /Install Node 20/);
+      for (const file of [`scripts/${name}.mjs`, 'scripts/setup/check-node.mjs']) {
+        const source = readFileSync(file, 'utf8');
+        const written = async (target: string) => (await transform(source, { target, format: 'esm' })).code;
+        // The way it is written is one that a Node of 2019 reads: there is nothing to translate.
+        expect(await written('node12.22')).toBe(await written('esnext'));
+      }
+    },
+  );
+
+  it('because a second one runs already, says so before it touches what the first one started', async () => {
+    const empty = mkdtempSync(path.join(tmpdir(), 'holdfast-empty-'));
+    const servers = [2525, 8025].map((port) => createServer().listen(port, '127.0.0.1'));
+    try {
+      // A port that is taken already, by the program itself, is as good.
+      await Promise.allSettled(servers.map((server) => once(server, 'listening')));
+      const env = { ...process.env, PORT: String(await freePort()), SMTP_URL: '', DATABASE_URL: '' };
+      // In a folder without a lock file and a database: nothing of either is asked for before.
+      const run = await runNode([path.resolve('scripts/start.mjs')], env, empty);
+      expectSentence(
+        run,
+        /^Port 2525, where the local mail fake listens, is taken, perhaps by another start/,
+        /SMTP_URL/,
+      );
+    } finally {
+      await Promise.all(servers.map((server) => new Promise((resolve) => server.close(resolve))));
+      expect(readdirSync(empty)).toEqual([]);
+      rmSync(empty, { recursive: true });
+    }
   });
 
   it('because the disk is full, says so and where to look', async () => {
@@ -66,6 +104,35 @@ describe('a start that cannot be', () => {
        runMain(async () => { throw Object.assign(new Error('ENOSPC: no space left on device, write'), { code: 'ENOSPC' }); });`,
     ]);
     expectSentence(run, /^The disk is full\. Free some space/, /df -h/);
+  });
+
+  it.each([
+    [
+      'a folder is not this account’s',
+      { code: 'EACCES', syscall: 'mkdir', path: '.data' },
+      /^This account may not read or write \.data\./,
+      /chown/,
+    ],
+    [
+      'a disk is read-only',
+      { code: 'EROFS', syscall: 'open', path: '.data/x' },
+      /may not read or write \.data\/x/,
+      /move/,
+    ],
+    [
+      'a program is missing',
+      { code: 'ENOENT', syscall: 'spawn npm', path: 'npm' },
+      /^The program "npm" is missing\./,
+      /Install it/,
+    ],
+  ])('because %s, says so', async (_, error, first, mend) => {
+    const run = await runNode([
+      '--input-type=module',
+      '-e',
+      `import { runMain } from './scripts/setup/say.mjs';
+       runMain(async () => { throw Object.assign(new Error('refused'), ${JSON.stringify(error)}); });`,
+    ]);
+    expectSentence(run, first, mend);
   });
 
   it('for a reason nobody thought of, says it in words before its trace', async () => {

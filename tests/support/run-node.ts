@@ -8,9 +8,13 @@ export interface NodeRun {
 }
 
 /** Runs Node to its end, as a person's shell would. */
-export function runNode(args: string[], env: NodeJS.ProcessEnv = process.env): Promise<NodeRun> {
+export function runNode(
+  args: string[],
+  env: NodeJS.ProcessEnv = process.env,
+  cwd: string = process.cwd(),
+): Promise<NodeRun> {
   return new Promise((resolve, reject) => {
-    const child = spawn(process.execPath, args, { env, stdio: ['ignore', 'pipe', 'pipe'] });
+    const child = spawn(process.execPath, args, { cwd, env, stdio: ['ignore', 'pipe', 'pipe'] });
     let output = '';
     for (const stream of [child.stdout, child.stderr])
       stream.on('data', (chunk: Buffer) => (output += chunk.toString()));
