@@ -12,7 +12,8 @@ import { SMTPServer } from 'smtp-server';
  */
 export async function startFakeMail({ smtpPort, pagePort, folder, user, password }) {
   mkdirSync(folder, { recursive: true });
-  let count = readdirSync(folder).length;
+  // Not how many there are: one that was taken away would let a later letter take another's place.
+  let count = Math.max(0, ...readdirSync(folder).map((name) => Number.parseInt(name, 10) || 0));
   const smtp = new SMTPServer({
     secure: false,
     disabledCommands: ['STARTTLS'],
@@ -30,9 +31,15 @@ export async function startFakeMail({ smtpPort, pagePort, folder, user, password
       stream.on('end', () => {
         if (stream.sizeExceeded)
           return callback(Object.assign(new Error('The letter is too large'), { responseCode: 552 }));
-        count += 1;
-        writeFileSync(path.join(folder, `${String(count).padStart(6, '0')}.eml`), Buffer.concat(chunks));
-        callback();
+        try {
+          const name = `${String(count + 1).padStart(6, '0')}.eml`;
+          writeFileSync(path.join(folder, name), Buffer.concat(chunks));
+          count += 1;
+          callback();
+        } catch (error) {
+          // A full disk, say: as a real server, it refuses the letter and goes on.
+          callback(Object.assign(new Error(`The letter could not be kept: ${error}`), { responseCode: 452 }));
+        }
       });
     },
   });
@@ -42,10 +49,10 @@ export async function startFakeMail({ smtpPort, pagePort, folder, user, password
   });
 
   const page = createServer((request, response) => {
-    answer(folder, new URL(request.url ?? '/', 'http://127.0.0.1')).then(
-      ({ type, body }) =>
+    answer(folder, request).then(
+      ({ status = 200, type, body }) =>
         response
-          .writeHead(200, {
+          .writeHead(status, {
             'content-type': type,
             'content-security-policy': "default-src 'none'; style-src 'unsafe-inline'",
           })
@@ -67,8 +74,12 @@ export async function startFakeMail({ smtpPort, pagePort, folder, user, password
   };
 }
 
-/** @param {string} folder @param {URL} url */
-async function answer(folder, url) {
+/** @param {string} folder @param {import('node:http').IncomingMessage} request */
+async function answer(folder, request) {
+  // A page of elsewhere whose name was made to point here must not read the letters: they hold links that sign in.
+  const { host = '' } = request.headers;
+  if (!/^(127\.0\.0\.1|localhost)(:\d+)?$/.test(host))
+    return { status: 403, type: 'text/plain', body: 'Open this page as http://127.0.0.1.' };
   const names = readdirSync(folder)
     .filter((name) => name.endsWith('.eml'))
     .sort()
@@ -86,7 +97,8 @@ async function answer(folder, url) {
       };
     }),
   );
-  if (url.pathname === '/letters.json') return { type: 'application/json', body: JSON.stringify({ letters }) };
+  if (request.url === '/letters.json') return { type: 'application/json', body: JSON.stringify({ letters }) };
+  if (request.url !== '/') return { status: 404, type: 'text/plain', body: 'There is no such page.' };
   return { type: 'text/html; charset=utf-8', body: inbox(letters) };
 }
 

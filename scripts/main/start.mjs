@@ -36,6 +36,8 @@ runMain(async () => {
   const ended = new Promise((resolve) => {
     for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => resolve(0));
   });
+  // Told at the next wait, so that what was started is ended all the same.
+  const broken = new Promise((_, reject) => process.on('uncaughtException', reject));
 
   try {
     const origin = process.env.NEXTAUTH_URL ?? `http://${HOST}:${port}`;
@@ -62,7 +64,7 @@ runMain(async () => {
 
     const web = startWeb(env, port);
     ends.push(web.stop);
-    await Promise.race([waitForAnswer(`http://${HOST}:${port}/api/health`, web), ended]);
+    await Promise.race([waitForAnswer(`http://${HOST}:${port}/api/health`, web), ended, broken]);
     const { demoPassword, demoSignIns } = await import('../demo.mjs');
     say(
       [
@@ -76,7 +78,7 @@ runMain(async () => {
         '',
       ].join('\n'),
     );
-    const code = await Promise.race([ended, web.died]);
+    const code = await Promise.race([ended, web.died, broken]);
     if (code !== 0 && !ending) throw new Mendable('The web server ended by itself.', `Its last lines:\n${web.tail()}`);
   } finally {
     await end();
