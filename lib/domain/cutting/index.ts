@@ -9,3 +9,5 @@ export { planSheets } from './sheets/plan-sheets';
 export type * from './sheets/request';
 export { cuttingJobs, usualHabits, type CuttingJob } from './cutting-jobs';
 export { cutOrder, wasteOf } from './sheets/cut-order';
+export { planRips, straightening } from './rips/plan-rips';
+export type * from './rips/request';
