@@ -32,6 +32,11 @@ export async function notify({
   if (notifyState() !== 'allowed') return false;
   const registration = await navigator.serviceWorker?.getRegistration();
   if (!registration) return false;
-  await registration.showNotification(title, { body, tag, data: { address }, icon: '/icon-192.png' });
-  return true;
+  try {
+    await registration.showNotification(title, { body, tag, data: { address }, icon: '/icon-192.png' });
+    return true;
+  } catch {
+    // Forbidden between asking and showing; sound and flash of the page still tell.
+    return false;
+  }
 }

@@ -43,7 +43,9 @@ export async function packFile(
 export async function takeToBench({ db, buildId, fetch, caches, onProgress }: PackDeps): Promise<PackResult> {
   const asked = await ask(fetch, `/api/builds/${buildId}/pack`);
   if (!asked.ok) return asked;
-  const manifest = packManifestSchema.safeParse(await asked.response.json().catch(() => null));
+  const body = await bodyOf(asked.response);
+  if (!body.ok) return body;
+  const manifest = packManifestSchema.safeParse(jsonOf(body.bytes));
   if (!manifest.success) return foreign;
   const { data } = manifest;
   if (data.accountId !== db.accountId) {
@@ -82,6 +84,32 @@ const foreign = {
   message: 'What answered is not Holdfast’s server. A Wi-Fi sign-in page may be in the way.',
 } as const;
 
+const noSignal = {
+  ok: false,
+  code: 'no-signal',
+  message: 'No signal, or the server cannot be reached. Try again where there is one.',
+} as const;
+
+/** Whole body of an answer; the signal may go while it comes. */
+async function bodyOf(
+  response: Response,
+): Promise<{ ok: true; bytes: ArrayBuffer } | Exclude<PackResult, { ok: true }>> {
+  try {
+    return { ok: true, bytes: await response.arrayBuffer() };
+  } catch {
+    return noSignal;
+  }
+}
+
+function jsonOf(bytes: ArrayBuffer): unknown {
+  try {
+    return JSON.parse(new TextDecoder().decode(bytes));
+  } catch {
+    // No JSON at all: the schema refuses it.
+    return null;
+  }
+}
+
 type Asked = { ok: true; response: Response } | Exclude<PackResult, { ok: true }>;
 
 async function ask(fetch: PackDeps['fetch'], url: string): Promise<Asked> {
@@ -89,13 +117,11 @@ async function ask(fetch: PackDeps['fetch'], url: string): Promise<Asked> {
   try {
     response = await fetch(url);
   } catch {
-    return {
-      ok: false,
-      code: 'no-signal',
-      message: 'No signal, or the server cannot be reached. Try again where there is one.',
-    };
+    return noSignal;
   }
-  if (response.ok && !response.redirected) return { ok: true, response };
+  // Our own addresses never lead elsewhere; a Wi-Fi's do.
+  if (response.redirected) return foreign;
+  if (response.ok) return { ok: true, response };
   if (response.status === 401)
     return { ok: false, code: 'sign-in', message: 'Your sign-in has ended. Sign in, then take it to the bench.' };
   if (response.status === 404)
@@ -119,8 +145,12 @@ async function bytesOf(
   }
   const asked = await ask(fetch, file.url);
   if (!asked.ok) return asked;
-  const bytes = await asked.response.arrayBuffer();
+  const body = await bodyOf(asked.response);
+  if (!body.ok) return body;
+  const { bytes } = body;
   if ((await sha256Hex(bytes)) !== file.sha256) {
+    // No file of a pack is a web page.
+    if (asked.response.headers.get('content-type')?.includes('html')) return foreign;
     return { ok: false, code: 'broken', message: `${file.title} changed on its way here. Try again.` };
   }
   try {

@@ -38,7 +38,13 @@ export async function preparePhoto(file: File, tools: PhotoTools = browserTools)
       `This picture has ${Math.round(file.size / 1_000_000)} MB, and ${MAX_PHOTO_BYTES / 1_000_000} MB is the most. Take it again at a smaller size.`,
     );
   }
-  const original = await file.arrayBuffer();
+  let original: ArrayBuffer;
+  try {
+    original = await file.arrayBuffer();
+  } catch {
+    // The gallery listed it, and it has gone since, or lies elsewhere where no signal reaches.
+    return no('unreadable', 'The picture could not be fetched from your gallery. Choose it again, or take it here.');
+  }
   const kind = imageKind(new Uint8Array(original));
   if (kind === null)
     return no('not-a-photo', `${file.name || 'This file'} is not a photo. Choose a JPEG, PNG or WebP picture.`);

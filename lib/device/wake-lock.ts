@@ -9,12 +9,15 @@ export function keepScreenOn(onChange: (on: boolean) => void): () => void {
   let wanted = true;
   const request = async () => {
     if (!wanted || document.visibilityState !== 'visible' || !('wakeLock' in navigator)) return onChange(false);
+    let got: WakeLockSentinel;
     try {
-      lock = await navigator.wakeLock.request('screen');
+      got = await navigator.wakeLock.request('screen');
     } catch {
       return onChange(false);
     }
-    if (!wanted) return void lock.release();
+    // Not wanted any more, or asked for twice: one that nobody holds would keep the screen on for ever.
+    if (!wanted || (lock && !lock.released)) return void got.release();
+    lock = got;
     lock.addEventListener('release', () => onChange(false));
     onChange(true);
   };

@@ -1,23 +1,14 @@
 import { afterEach, describe, expect, it, vi } from 'vitest';
-import { playTone, unlockSound } from '@/lib/device/alarm-sound';
 import { shouldInstallFirst } from '@/lib/device/install-hint';
 import { askToNotify, notify, notifyState } from '@/lib/device/notify';
 import { askToPersist, storageHealth } from '@/lib/device/storage-health';
 import { keepScreenOn } from '@/lib/device/wake-lock';
+import { withNavigator } from '../support/browser';
 
 afterEach(() => {
   vi.unstubAllGlobals();
   vi.restoreAllMocks();
 });
-
-/** A navigator with these parts and the rest of the real one. */
-function withNavigator(parts: Record<string, unknown>): void {
-  const proxied = new Proxy(navigator, {
-    get: (target, key) => (key in parts ? parts[key as string] : (target as never)[key]),
-    has: (target, key) => (key in parts ? parts[key as string] !== undefined : key in target),
-  });
-  vi.stubGlobal('navigator', proxied);
-}
 
 describe('keeping the screen on', () => {
   it('tells when it is kept on, and when the phone lets it go', async () => {
@@ -36,6 +27,48 @@ describe('keeping the screen on', () => {
     expect(lock.release).toHaveBeenCalled();
   });
 
+  it('asks again when the page is shown again, and holds no lock that nobody lets go', async () => {
+    const locks: { released: boolean; addEventListener: () => void; release: () => Promise<void> }[] = [];
+    const request = async () => {
+      const lock = {
+        released: false,
+        addEventListener: () => undefined,
+        release: async () => {
+          lock.released = true;
+        },
+      };
+      locks.push(lock);
+      return lock;
+    };
+    withNavigator({ wakeLock: { request } });
+    const shown = () => document.dispatchEvent(new Event('visibilitychange'));
+    const held = () => locks.filter(({ released }) => !released).length;
+    const stop = keepScreenOn(() => undefined);
+    // Shown while it is still being asked for.
+    shown();
+    await expect.poll(() => locks.length).toBe(2);
+    await expect.poll(held).toBe(1);
+    // Hiding the page ends the lock.
+    for (const lock of locks) lock.released = true;
+    shown();
+    await expect.poll(() => locks.length).toBe(3);
+    expect(held()).toBe(1);
+    stop();
+    await expect.poll(held).toBe(0);
+    shown();
+    await Promise.resolve();
+    expect(locks).toHaveLength(3);
+  });
+
+  it('lets go of a lock that comes only after it was not wanted any more', async () => {
+    const release = vi.fn(async () => undefined);
+    let give = (_: unknown) => {};
+    withNavigator({ wakeLock: { request: () => new Promise((resolve) => (give = resolve)) } });
+    keepScreenOn(() => undefined)();
+    give({ released: false, addEventListener: () => undefined, release });
+    await expect.poll(() => release.mock.calls.length).toBe(1);
+  });
+
   it('says no where the phone refuses, and where there is no such thing', async () => {
     const told: boolean[] = [];
     withNavigator({ wakeLock: { request: () => Promise.reject(new DOMException('battery', 'NotAllowedError')) } });
@@ -52,6 +85,37 @@ describe('notifications', () => {
     vi.stubGlobal('Notification', { permission: 'denied', requestPermission: request });
     expect(await askToNotify()).toBe('denied');
     expect(request).not.toHaveBeenCalled();
+    expect(await notify({ title: 'Glue', body: '', tag: 't', address: '/bench' })).toBe(false);
+  });
+
+  it.each([
+    ['granted', 'allowed'],
+    ['denied', 'denied'],
+    ['default', 'unasked'],
+  ])('asked for in a tap, and answered %s, are %s', async (answer, state) => {
+    const asked = {
+      permission: 'default',
+      requestPermission: vi.fn(async () => {
+        asked.permission = answer;
+        return answer;
+      }),
+    };
+    vi.stubGlobal('Notification', asked);
+    expect(notifyState()).toBe('unasked');
+    expect(await askToNotify()).toBe(state);
+    expect(asked.requestPermission).toHaveBeenCalledOnce();
+  });
+
+  it.each([
+    ['the browser has no worker', undefined],
+    ['none is installed yet', { getRegistration: async () => undefined }],
+    [
+      'they were forbidden meanwhile',
+      { getRegistration: async () => ({ showNotification: () => Promise.reject(new TypeError('no permission')) }) },
+    ],
+  ])('are not shown where %s, and nothing breaks', async (_, serviceWorker) => {
+    vi.stubGlobal('Notification', { permission: 'granted' });
+    withNavigator({ serviceWorker });
     expect(await notify({ title: 'Glue', body: '', tag: 't', address: '/bench' })).toBe(false);
   });
 
@@ -76,9 +140,20 @@ describe('the phone’s storage', () => {
   it('is low below 100 MB, and unknown where the browser does not say', async () => {
     withNavigator({ storage: { persisted: async () => true, estimate: async () => ({ quota: 2e8, usage: 1.2e8 }) } });
     expect(await storageHealth()).toEqual({ persistent: true, freeBytes: 8e7, low: true });
+    withNavigator({ storage: { persisted: async () => false, estimate: async () => ({ quota: 1e8, usage: 2e8 }) } });
+    expect(await storageHealth()).toEqual({ persistent: false, freeBytes: 0, low: true });
+    withNavigator({ storage: { estimate: async () => ({}) } });
+    expect(await storageHealth()).toEqual({ persistent: null, freeBytes: null, low: false });
     withNavigator({ storage: undefined });
     expect(await storageHealth()).toEqual({ persistent: null, freeBytes: null, low: false });
     expect(await askToPersist()).toBeNull();
+  });
+});
+
+describe('asking the browser to keep it', () => {
+  it.each([true, false])('tells its answer: %s', async (answer) => {
+    withNavigator({ storage: { persist: async () => answer } });
+    expect(await askToPersist()).toBe(answer);
   });
 });
 
@@ -104,9 +179,63 @@ describe('installing first', () => {
 });
 
 describe('the alarm’s sound', () => {
+  const started: number[] = [];
+  class Sound {
+    state = 'suspended';
+    currentTime = 10;
+    destination = {};
+    static allowed = true;
+    async resume() {
+      if (!Sound.allowed) throw new DOMException('a call holds it', 'InvalidStateError');
+      this.state = 'running';
+    }
+    createGain() {
+      const ramp = {
+        setValueAtTime: () => {},
+        linearRampToValueAtTime: () => {},
+        exponentialRampToValueAtTime: () => {},
+      };
+      return { gain: ramp, connect: () => undefined };
+    }
+    createOscillator() {
+      const begin = (at: number) => started.push(at);
+      return { frequency: { value: 0 }, connect: (to: unknown) => to, start: begin, stop: () => undefined };
+    }
+  }
+  /** As on a page just opened, where no tap has been. */
+  async function fresh() {
+    vi.resetModules();
+    started.length = 0;
+    Sound.allowed = true;
+    return import('@/lib/device/alarm-sound');
+  }
+
   it('is silent and says so before a tap has unlocked it', async () => {
+    const { playTone, unlockSound } = await fresh();
     expect(playTone('end')).toBe(false);
     vi.stubGlobal('AudioContext', undefined);
     expect(await unlockSound()).toBe(false);
+  });
+
+  it('plays at once after a tap, the end unlike the half', async () => {
+    vi.stubGlobal('AudioContext', Sound);
+    const { playTone, unlockSound } = await fresh();
+    expect(await unlockSound()).toBe(true);
+    expect(playTone('half')).toBe(true);
+    const half = started.splice(0);
+    expect(playTone('end')).toBe(true);
+    expect(half).toEqual([10, 10.2]);
+    expect(started).toHaveLength(3);
+  });
+
+  it('says that it is silent while a phone call holds it, and plays after the next tap', async () => {
+    vi.stubGlobal('AudioContext', Sound);
+    const { playTone, unlockSound } = await fresh();
+    Sound.allowed = false;
+    expect(await unlockSound()).toBe(false);
+    expect(playTone('end')).toBe(false);
+    Sound.allowed = true;
+    expect(await unlockSound()).toBe(true);
+    expect(playTone('end')).toBe(true);
   });
 });

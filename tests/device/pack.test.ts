@@ -68,6 +68,14 @@ async function answer(url: string): Promise<Response> {
   return bytes ? new Response(bytes) : new Response('', { status: 404 });
 }
 
+/** An answer whose connection is lost after its first bytes. */
+function cutShort(): Response {
+  const response = new Response('{"format":');
+  return Object.defineProperty(response, 'arrayBuffer', {
+    value: () => Promise.reject(new TypeError('network error')),
+  });
+}
+
 function take(fetch: (url: string) => Promise<Response> = answer, onProgress?: (progress: PackProgress) => void) {
   fetched.length = 0;
   return takeToBench({ db: phone.db, buildId: BUILD, fetch, caches, onProgress });
@@ -109,11 +117,45 @@ describe('taking a build to the bench', () => {
     expect(fetched).not.toContain('/api/plan');
   });
 
-  it('takes a Wi-Fi sign-in page for no answer', async () => {
-    const page = async () => new Response('<html>Welcome to the café</html>', { status: 200 });
-    const result = await take(page);
+  it('says that the signal went when an answer stops in its middle, and goes on from there', async () => {
+    for (const from of ['/pack', '/plan', '/d']) {
+      const stops = async (url: string) => (url.endsWith(from) ? cutShort() : answer(url));
+      const result = await take(stops);
+      expect(result, from).toMatchObject({ ok: false, code: 'no-signal' });
+      expect(result.ok ? '' : result.message).toMatch(/^No signal/);
+      expect(await planHere()).toBeUndefined();
+    }
+    expect(await take()).toMatchObject({ ok: true });
+    expect(fetched).not.toContain('/api/plan');
+  });
+
+  it.each([
+    ['in place of the list', '/pack', { redirected: false }],
+    ['in place of a file', '/d', { redirected: false }],
+    ['after leading elsewhere', '/plan', { redirected: true }],
+  ])('takes a Wi-Fi sign-in page for no answer, %s, and keeps nothing of it', async (_, from, { redirected }) => {
+    const ready = (await phone.db.builds.get(BUILD))!.packReadyAt;
+    const page = () => {
+      const response = new Response('<html>Welcome to the café</html>', {
+        headers: { 'content-type': redirected ? 'text/plain' : 'text/html' },
+      });
+      return Object.defineProperty(response, 'redirected', { value: redirected });
+    };
+    const result = await take(async (url) => (url.endsWith(from) ? page() : answer(url)));
     expect(result).toMatchObject({ ok: false, code: 'no-signal' });
     expect(result.ok ? '' : result.message).toMatch(/Wi-Fi sign-in page/);
+    for (const kept of cached.values()) expect(await kept.clone().text()).not.toContain('café');
+    expect((await phone.db.builds.get(BUILD))!.packReadyAt).toBe(ready);
+  });
+
+  it('refuses a plan that this version cannot read, though it came whole', async () => {
+    const plan = new TextEncoder().encode('{"format":"a later one"}');
+    files.set('/api/plan', plan);
+    Object.assign(manifest.files[0]!, { sha256: await sha256Hex(plan.buffer), bytes: plan.byteLength });
+    const result = await take();
+    expect(result).toMatchObject({ ok: false, code: 'broken' });
+    expect(result.ok ? '' : result.message).toMatch(/cannot be read by this version.*Update it/);
+    expect((await phone.db.builds.get(BUILD))!.name).toBe('Trestles');
   });
 
   it.each([

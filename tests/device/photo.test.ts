@@ -57,6 +57,29 @@ describe('a photo made ready', () => {
     expect(heic.ok ? '' : heic.message).toMatch(/HEIC/);
   });
 
+  it('that the gallery does not hand over is said to be still there', async () => {
+    const away = file(JPEG);
+    away.arrayBuffer = () => Promise.reject(new DOMException('gone', 'NotReadableError'));
+    const prepared = await preparePhoto(away, tools());
+    expect(prepared).toMatchObject({ ok: false, code: 'unreadable' });
+    expect(prepared.ok ? '' : prepared.message).toMatch(/from your gallery\. Choose it again/);
+  });
+
+  it.each([
+    ['HEIC, which others cannot see', HEIC],
+    ['a text', [...'Dear bench'].map((c) => c.charCodeAt(0))],
+  ])('is not kept as %s, whatever the browser made of it', async (_, made) => {
+    const odd = tools({ shrink: async () => new Blob([new Uint8Array(made)]) });
+    expect(await preparePhoto(file(JPEG), odd)).toMatchObject({ ok: false, code: 'unreadable' });
+  });
+
+  it('goes by the bytes it has, not by its name or by what the browser calls it', async () => {
+    const png = [0x89, ...'PNG\r\n\x1a\n'].map((c) => (typeof c === 'number' ? c : c.charCodeAt(0)));
+    const browser = tools();
+    await preparePhoto(new File([new Uint8Array(png)], 'picture.txt', { type: 'text/plain' }), browser);
+    expect(browser.shrink).toHaveBeenCalledWith(expect.objectContaining({ type: 'image/png' }), expect.anything());
+  });
+
   it('that came out blank, as a canvas without memory makes it, is not kept', async () => {
     expect(await preparePhoto(file(JPEG), tools({ look: async () => null }))).toMatchObject({
       ok: false,
