@@ -37,9 +37,11 @@ export async function installDebian(packages, why) {
   }
 }
 
-/** Folder of the newest PostgreSQL's programs, or null. @returns {string | null} */
-export function findPostgres() {
-  const root = '/usr/lib/postgresql';
+/** Where Debian keeps the programs of each version of PostgreSQL. */
+const POSTGRES = '/usr/lib/postgresql';
+
+/** Folder of the newest PostgreSQL's programs, or null. @param {string} root @returns {string | null} */
+function findPostgres(root) {
   if (!existsSync(root)) return null;
   const versions = readdirSync(root)
     .filter((name) => existsSync(`${root}/${name}/bin/initdb`))
@@ -47,13 +49,16 @@ export function findPostgres() {
   return versions[0] ? `${root}/${versions[0]}/bin` : null;
 }
 
-/** @returns {Promise<string>} folder of PostgreSQL's programs, installed when missing */
-export async function needPostgres() {
-  if (!findPostgres()) await installDebian(['postgresql'], 'PostgreSQL');
-  const found = findPostgres();
+/**
+ * @param {{ root?: string }} [options]  `root`: where its versions are
+ * @returns {Promise<string>} folder of PostgreSQL's programs, installed when missing
+ */
+export async function needPostgres({ root = POSTGRES } = {}) {
+  if (!findPostgres(root)) await installDebian(['postgresql'], 'PostgreSQL');
+  const found = findPostgres(root);
   if (!found)
     throw new Mendable(
-      'PostgreSQL was installed, and its programs are not in /usr/lib/postgresql.',
+      `PostgreSQL was installed, and its programs are not in ${root}.`,
       'Install the Debian package "postgresql" by hand.',
     );
   return found;

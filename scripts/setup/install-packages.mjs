@@ -15,7 +15,7 @@ export async function installPackages() {
     throwWhenDiskFull(output);
     throw new Mendable(
       'The packages could not be installed.',
-      `npm said:\n${output.trim().split('\n').slice(-8).join('\n')}`,
+      `Mend what npm says here (often there is no network), then run the same command again:\n${output.trim().split('\n').slice(-8).join('\n')}`,
     );
   }
   writeFileSync(MARK, lock);

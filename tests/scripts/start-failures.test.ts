@@ -1,14 +1,15 @@
 import { createHash } from 'node:crypto';
 import { once } from 'node:events';
-import { chmodSync, mkdtempSync, readFileSync, readdirSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
+import { mkdtempSync, readFileSync, readdirSync, rmSync } from 'node:fs';
 import { createServer, type AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { transform } from 'esbuild';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { nodeProblem } from '@/scripts/setup/check-node.mjs';
 import { freePort } from '@/scripts/setup/ports.mjs';
 import { runNode } from '../support/run-node';
+import { useShims } from '../support/shims';
 
 /** What is said when a start fails: a sentence first, then what to do, and no trace. */
 function expectSentence({ code, firstLine, output }: Awaited<ReturnType<typeof runNode>>, first: RegExp, mend: RegExp) {
@@ -148,17 +149,7 @@ describe('a start that cannot be', () => {
 });
 
 describe('a missing Debian package', () => {
-  let bin: string;
-  beforeAll(() => {
-    bin = mkdtempSync(path.join(tmpdir(), 'holdfast-bin-'));
-    symlinkSync('/bin/sh', path.join(bin, 'sh'));
-  });
-  afterAll(() => rmSync(bin, { recursive: true }));
-
-  function shim(name: string, script: string): void {
-    writeFileSync(path.join(bin, name), `#!/bin/sh\n${script}\n`);
-    chmodSync(path.join(bin, name), 0o755);
-  }
+  const { folder: bin, shim } = useShims();
 
   /** Installs with only the given programs to be found, as this user. */
   const install = (uid: number) =>
@@ -171,7 +162,7 @@ describe('a missing Debian package', () => {
          process.getuid = () => ${uid};
          runMain(() => installDebian(['chromium'], 'A browser'));`,
       ],
-      { ...process.env, PATH: bin },
+      { ...process.env, PATH: bin() },
     );
 
   it('on another system, names the packages', async () => {
