@@ -233,12 +233,12 @@ function ruinSheet(sheet: SheetLayout, random: () => number): Item[] {
   if (sheet.strips.length === 0) return [];
   const choice = random();
   const strip = Math.floor(random() * sheet.strips.length);
-  if (choice < 0.3) return takeOff(sheet, (_, s) => s === strip);
-  if (choice < 0.55) {
+  if (choice < 0.15) return takeOff(sheet, (_, s) => s === strip);
+  if (choice < 0.65) {
     const stack = Math.floor(random() * sheet.strips[strip]!.stacks.length);
     return takeOff(sheet, (_, s, t) => s === strip && t === stack);
   }
-  if (choice < 0.65) return takeOff(sheet, () => true);
+  if (choice < 0.7) return takeOff(sheet, () => true);
   const share = 0.1 + 0.4 * random();
   return takeOff(sheet, () => random() < share);
 }
