@@ -50,6 +50,8 @@ test('an afternoon at the bench with the server stopped, and all of it in Postgr
     await page.getByRole('button', { name: 'Start this build' }).click();
     await page.waitForURL('**/desk/builds/*');
     buildId = page.url().split('/').at(-1)!;
+    await expect(page.getByRole('heading', { name: 'Bench for the back door', level: 1 })).toBeVisible();
+    await expect(page.getByRole('heading', { name: 'Build log' })).toBeVisible();
   });
 
   await test.step('take it to the bench', () => takeToBench(page, program, 'Bench for the back door'));

@@ -31,6 +31,8 @@ test('a second account on the same phone sees nothing of the first, whose record
   await test.step('the first sends a photo and looks at it at the desk; its sign-in ends; more is held', async () => {
     await addPhoto(200);
     await expect(page.getByRole('button', { name: /All sent/ })).toBeVisible({ timeout: 40_000 });
+    // "All sent" may still be that of before the photo.
+    await expect.poll(() => program.rows('select 1 from photos'), { timeout: 40_000 }).toHaveLength(1);
     sent = (await recordsOnPhone<{ sha256: string }>(page, 'photos'))[0]!.sha256;
     await page.goto(`${program.url}/desk/builds/${buildId}`);
     await expect(page.getByRole('img').first()).toBeVisible();

@@ -53,6 +53,9 @@ export async function listBuilds(accountId: string, now = Date.now()): Promise<B
   return rows.sort((a, b) => (b.lastEntryAt ?? b.startedAt).localeCompare(a.lastEntryAt ?? a.startedAt));
 }
 
+/** State of a build without entries, in plain objects as a stored snapshot has them: pages pass on nothing else. */
+const nothingYet = (): BuildState => structuredClone(emptyState());
+
 /** A build with its plan and folded state, or null. Who may see it is the caller's to ask. */
 export async function findBuild(buildId: string): Promise<BuildDetail | null> {
   const build = await db().models.Build.findByPk(buildId);
@@ -65,7 +68,7 @@ async function readDetail(build: Build): Promise<BuildDetail> {
     PlanRevision.findByPk(build.planRevisionId, { rejectOnEmpty: true }),
     Snapshot.findByPk(build.id),
   ]);
-  return { build, revision, plan: revision.document, state: snapshot?.state ?? emptyState(), readAt: Date.now() };
+  return { build, revision, plan: revision.document, state: snapshot?.state ?? nothingYet(), readAt: Date.now() };
 }
 
 async function readLastEntryAt(build: Build): Promise<string | null> {
