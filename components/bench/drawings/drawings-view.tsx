@@ -35,10 +35,10 @@ export function DrawingsView() {
               highlighted={NONE}
               standing={standing}
               elevation={elevation.elevation}
-              label={`The piece seen ${elevation.from}, what stands already in dark lines`}
+              label={`The piece seen ${elevation.from}, what stands already in strong lines`}
             />
             <figcaption className="flex flex-wrap items-center justify-between gap-2 text-[1.0625rem] text-soft">
-              <span>The whole piece; dark lines stand already</span>
+              <span>The whole piece; what stands already has strong lines</span>
               <ElevationChoice chosen={elevation} onChoose={setElevation} />
             </figcaption>
           </figure>
